@@ -1,0 +1,3 @@
+export type * from './design.ts';
+export type * from './findings.ts';
+export type * from './assessment.ts';
