@@ -1,0 +1,60 @@
+import { ChangeDetectionStrategy, Component, computed, inject, viewChild } from '@angular/core';
+import { MatButton } from '@angular/material/button';
+import { Router } from '@angular/router';
+import type { Finding } from '#calc';
+import { ProjectStore } from '../../core/project/project-store';
+import { Segmented } from '../../shared/controls/segmented';
+import { Icon } from '../../shared/icon/icon';
+import { ErrorState } from '../../shared/states/error-state';
+import { LoadingRows } from '../../shared/states/loading-rows';
+import { ChannelPanel } from '../channel-panel/channel-panel';
+import { ChannelStrip } from '../channel-strip/channel-strip';
+import { ChannelTable } from '../channel-table/channel-table';
+import { MappingViewStore, type Shown } from '../mapping-view-store';
+import { PreviewPanel } from '../preview-panel/preview-panel';
+import { UnmappedList } from '../unmapped-list/unmapped-list';
+
+@Component({
+  selector: 'lw-mapping-page',
+  imports: [ChannelPanel, ChannelStrip, ChannelTable, ErrorState, Icon, LoadingRows, MatButton, PreviewPanel, Segmented, UnmappedList],
+  providers: [MappingViewStore],
+  changeDetection: ChangeDetectionStrategy.OnPush,
+  host: { '(document:keydown.alt.a)': 'preview($event)', '(document:keydown.escape)': 'view.discardPreview()' },
+  templateUrl: './mapping-page.html',
+  styleUrl: './mapping-page.css',
+})
+export class MappingPage {
+  protected readonly project = inject(ProjectStore);
+  protected readonly view = inject(MappingViewStore);
+  private readonly router = inject(Router);
+  private readonly table = viewChild(ChannelTable);
+
+  protected readonly kinds: readonly { readonly value: Shown; readonly label: string }[] = [
+    { value: 'output', label: 'Outputs' }, { value: 'input', label: 'Inputs' }, { value: 'both', label: 'Both' },
+  ];
+  protected readonly projectId = computed(() => this.project.document()?.project.id ?? '');
+  protected readonly listUrl = computed(() => `/api/v1/projects/${this.projectId()}/documents/io-list.xlsx`);
+  protected readonly sentence = computed(() => {
+    const c = this.view.counts();
+    return `${c.mapped} of ${c.dispensers} dispensers mapped. ${c.cabinets} cabinets, ${c.modules} modules.`;
+  });
+
+  protected preview(event?: Event): void {
+    event?.preventDefault();
+    if (this.view.canEdit()) this.view.previewAutoAssign();
+  }
+
+  protected show(kind: Shown): void {
+    this.view.shown.set(kind);
+  }
+
+  protected goTo(moduleId: string): void {
+    const type = this.view.cabinets().flatMap((c) => c.modules).find((m) => m.module.id === moduleId)?.type;
+    if (type && this.view.shown() !== 'both') this.view.shown.set(type.kind);
+    setTimeout(() => this.table()?.goTo(moduleId));
+  }
+
+  protected mend(finding: Finding): void {
+    void this.router.navigate(['/projects', this.projectId(), 'findings'], { fragment: finding.key });
+  }
+}
