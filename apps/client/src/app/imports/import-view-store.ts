@@ -34,7 +34,7 @@ export class ImportViewStore {
     const label: readonly (readonly [RowFilter, string])[] = [
       ['all', 'All'], ['create', 'Create'], ['update', 'Change'], ['same', 'Same'], ['problems', 'Problems'], ['skip', 'Skip'],
     ];
-    return label.map(([value, text]) => ({ value, label: `${text} ${count(value)}` }));
+    return label.map(([value, text]) => ({ value, label: text, count: count(value) }));
   });
   readonly rows = computed(() => (this.shown()?.rows ?? []).filter((row) => passes(row, this.filter())));
   /** Rows that the commit would write. */
@@ -60,6 +60,10 @@ export class ImportViewStore {
   async mapValue(field: string, text: string, value: string | null): Promise<void> {
     const before = this.chosen().valueMapping ?? {};
     await this.look({ ...this.chosen(), mapping: this.mapping(), valueMapping: { ...before, [field]: { ...before[field], [text]: value } } });
+  }
+
+  show(filter: string): void {
+    this.filter.set(filter as RowFilter);
   }
 
   async commit(): Promise<void> {

@@ -1,6 +1,8 @@
 import { computed, inject, Injectable, signal } from '@angular/core';
 import { autoAssign, type Dispenser, type Point, type Purpose } from '#calc';
 import { ProjectStore } from '../core/project/project-store';
+import type { LaneView } from '../shared/lane/lane-view';
+import { laneViewsOf } from '../shared/lane/lane-views';
 import { assignChange, fillFrom, missingPurposes, proposalChanges, unassignChanges } from './mapping-changes';
 import { type ChannelRow, mappingSections, modulesByCabinet, type Proposal } from './mapping-rows';
 
@@ -37,6 +39,12 @@ export class MappingViewStore {
     const design = this.project.design();
     const assessment = this.project.assessment();
     return design && assessment ? mappingSections(design, assessment, this.shown(), this.preview()?.proposed ?? []) : [];
+  });
+  /** The drawing of each lane, by dispenser id. */
+  readonly lanes = computed<ReadonlyMap<string, LaneView>>(() => {
+    const design = this.project.design();
+    const assessment = this.project.assessment();
+    return design && assessment ? laneViewsOf(design, assessment) : new Map<string, LaneView>();
   });
   readonly open = computed<readonly OpenLane[]>(() => {
     const design = this.project.design();

@@ -6,6 +6,7 @@ import { problemText } from '../../core/api/problem';
 import { ProjectStore } from '../../core/project/project-store';
 import { Segmented } from '../../shared/controls/segmented';
 import { Notice } from '../../shared/states/notice';
+import { PageHead } from '../../shared/states/page-head';
 import { ColumnList } from '../column-list/column-list';
 import { FileDrop } from '../file-drop/file-drop';
 import { ImportViewStore } from '../import-view-store';
@@ -13,7 +14,7 @@ import { RowTable } from '../row-table/row-table';
 
 @Component({
   selector: 'lw-import-page',
-  imports: [ColumnList, FileDrop, MatButton, MatProgressBar, Notice, RouterLink, RowTable, Segmented],
+  imports: [ColumnList, FileDrop, MatButton, MatProgressBar, Notice, RouterLink, PageHead, RowTable, Segmented],
   providers: [ImportViewStore],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './import-page.html',
@@ -24,6 +25,10 @@ export class ImportPage {
   protected readonly store = inject(ImportViewStore);
   protected readonly problemText = problemText;
   protected readonly projectId = computed(() => this.project.document()?.project.id ?? '');
+  protected readonly sub = computed(() => {
+    const preview = this.store.preview();
+    return preview ? `${preview.fileName}, ${preview.counts.rows} rows` : '';
+  });
   protected readonly used = computed(() => Object.keys(this.store.mapping()).length);
   protected readonly act = computed(() => {
     const counts = this.store.preview()?.counts;

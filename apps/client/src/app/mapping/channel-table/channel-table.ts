@@ -5,6 +5,7 @@ import { ampsAgainstMaximum, type Finding } from '#calc';
 import { LoadBar } from '../../shared/figure/load-bar';
 import { FindingMark } from '../../shared/findings/finding-mark';
 import { LaneLine } from '../../shared/lane/lane-line';
+import type { LaneView } from '../../shared/lane/lane-view';
 import { ChannelFinder } from '../channel-finder/channel-finder';
 import type { ChannelRow, GroupSection } from '../mapping-rows';
 import type { OpenLane } from '../mapping-view-store';
@@ -20,6 +21,7 @@ import type { OpenLane } from '../mapping-view-store';
 export class ChannelTable {
   readonly sections = input.required<readonly GroupSection[]>();
   readonly open = input.required<readonly OpenLane[]>();
+  readonly lanes = input.required<ReadonlyMap<string, LaneView>>();
   readonly editable = input.required<boolean>();
   readonly projectId = input.required<string>();
   readonly focusedKey = input.required<string | null>();
@@ -43,10 +45,6 @@ export class ChannelTable {
 
   protected one(key: string): ReadonlySet<string> {
     return new Set([key]);
-  }
-
-  protected kindOf(row: ChannelRow): string {
-    return row.occupant?.dispenser.wiring ?? '';
   }
 
   protected press(event: KeyboardEvent, row: ChannelRow): void {

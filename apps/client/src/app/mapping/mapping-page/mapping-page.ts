@@ -1,5 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, inject, viewChild } from '@angular/core';
 import { MatButton } from '@angular/material/button';
+import { MatMenu, MatMenuItem, MatMenuTrigger } from '@angular/material/menu';
 import { Router } from '@angular/router';
 import type { Finding } from '#calc';
 import { ProjectStore } from '../../core/project/project-store';
@@ -7,6 +8,7 @@ import { Segmented } from '../../shared/controls/segmented';
 import { Icon } from '../../shared/icon/icon';
 import { ErrorState } from '../../shared/states/error-state';
 import { LoadingRows } from '../../shared/states/loading-rows';
+import { PageHead } from '../../shared/states/page-head';
 import { ChannelPanel } from '../channel-panel/channel-panel';
 import { ChannelStrip } from '../channel-strip/channel-strip';
 import { ChannelTable } from '../channel-table/channel-table';
@@ -16,7 +18,7 @@ import { UnmappedList } from '../unmapped-list/unmapped-list';
 
 @Component({
   selector: 'lw-mapping-page',
-  imports: [ChannelPanel, ChannelStrip, ChannelTable, ErrorState, Icon, LoadingRows, MatButton, PreviewPanel, Segmented, UnmappedList],
+  imports: [ChannelPanel, ChannelStrip, ChannelTable, ErrorState, Icon, LoadingRows, MatButton, MatMenu, MatMenuItem, MatMenuTrigger, PageHead, PreviewPanel, Segmented, UnmappedList],
   providers: [MappingViewStore],
   changeDetection: ChangeDetectionStrategy.OnPush,
   host: { '(document:keydown.alt.a)': 'preview($event)', '(document:keydown.escape)': 'view.discardPreview()' },
@@ -33,7 +35,7 @@ export class MappingPage {
     { value: 'output', label: 'Outputs' }, { value: 'input', label: 'Inputs' }, { value: 'both', label: 'Both' },
   ];
   protected readonly projectId = computed(() => this.project.document()?.project.id ?? '');
-  protected readonly listUrl = computed(() => `/api/v1/projects/${this.projectId()}/documents/io-list.xlsx`);
+  protected readonly listUrl = computed(() => `/api/v1/projects/${this.projectId()}/documents/io-list`);
   protected readonly sentence = computed(() => {
     const c = this.view.counts();
     return `${c.mapped} of ${c.dispensers} dispensers mapped. ${c.cabinets} cabinets, ${c.modules} modules.`;
@@ -44,8 +46,8 @@ export class MappingPage {
     if (this.view.canEdit()) this.view.previewAutoAssign();
   }
 
-  protected show(kind: Shown): void {
-    this.view.shown.set(kind);
+  protected show(kind: string): void {
+    this.view.shown.set(kind as Shown);
   }
 
   protected goTo(moduleId: string): void {
