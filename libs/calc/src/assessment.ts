@@ -57,8 +57,10 @@ export interface TimedPlan {
 export interface VoltageFigure {
   /** Lowest voltage at the device, V; null: not computable or collapsed. */
   readonly volts: number;
-  /** Dispensers running in the set that causes it, this one first. */
+  /** Dispensers of its circuit running in the set that causes it, this one first (with all on: in no order). */
   readonly worstSet: readonly string[];
+  /** True: a sound bound that no permitted set can go below (constant power); absent: exact. */
+  readonly bound?: boolean;
 }
 
 export interface LaneFigures {

@@ -1,0 +1,51 @@
+import type { SupplyFigures } from '../assessment.ts';
+import type { Supply, SupplyType } from '../design.ts';
+import { type LimitOf, type LoadSum, NO_LIMIT, worstSum } from './load-sum.ts';
+
+/** Lowest voltage that counts where a supply states no tolerance, V: 24 V − 15 % (IEC 61131-2). */
+export const LOWEST_UNSTATED_V = 20.4;
+
+/** Lowest voltage of a supply, V: setpoint × (1 − tolerance), or 20.4 V where none is stated. */
+export function lowestSupplyV(supply: Supply, type: SupplyType | undefined): number {
+  const tolerance = type?.tolerancePercent ?? null;
+  return tolerance === null ? Math.min(supply.setV, LOWEST_UNSTATED_V) : supply.setV * (1 - tolerance / 100);
+}
+
+/**
+ * Rating at a temperature, A: above `deratingFromC` it falls by the stated part of itself for each
+ * kelvin, never under 0. A redundant pair counts as one, since one must carry all when the other fails.
+ */
+export function deratedA(type: SupplyType, temperatureC: number): number {
+  const kelvins = Math.max(0, temperatureC - type.deratingFromC);
+  return type.ratedA * Math.max(0, 1 - (kelvins * type.deratingPercentPerK) / 100);
+}
+
+export interface SupplyLoad {
+  /** Other standing load, idling dispensers and all on their own clock, A. */
+  readonly standingA: number;
+  /** Run increments of all circuits on it. */
+  readonly sum: LoadSum;
+  /** Largest current of one dispenser on it, A; 0: none. */
+  readonly largestA: number;
+}
+
+/**
+ * Budget of a supply: (standing + timed + worst sum of run increments under the limits) × (1 + margin)
+ * against the rating at the cabinet's temperature, with what is left in A and in dispensers.
+ */
+export function supplyFigures(load: SupplyLoad, ratingA: number, lowestV: number, marginPercent: number, limitOf: LimitOf): SupplyFigures {
+  const worstA = load.standingA + worstSum(load.sum, limitOf);
+  const demandA = worstA * (1 + marginPercent / 100);
+  const headroomA = ratingA - demandA;
+  const oneMoreA = load.largestA * (1 + marginPercent / 100);
+  return {
+    standingA: load.standingA,
+    worstA,
+    allOnA: load.standingA + worstSum(load.sum, NO_LIMIT),
+    demandA,
+    ratingA,
+    headroomA,
+    headroomDispensers: oneMoreA > 0 ? Math.max(0, Math.floor(headroomA / oneMoreA + 1e-9)) : null,
+    lowestV,
+  };
+}

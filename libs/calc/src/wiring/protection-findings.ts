@@ -1,0 +1,70 @@
+import type { CircuitContext } from '../assess-context.ts';
+import { type FindingCode, makeFinding } from '../finding-codes.ts';
+import type { Finding } from '../findings.ts';
+import { ampsAgainstMaximum, ampsAgainstMinimum, formatAmps } from '../format.ts';
+import { tagOf } from '../design-index.ts';
+
+interface Compared {
+  readonly name: string;
+  readonly value: number;
+  readonly limit: number;
+  readonly unit: string;
+}
+type Notice = (code: FindingCode, title: string, remedy: string, detail: string, compared?: Compared, dispenserIds?: readonly string[]) => void;
+
+/** Screening of a circuit's protection: load, tripping at the far end, what the supply can deliver. */
+export function protectionFindings(context: CircuitContext): Finding[] {
+  const { circuit, short } = context;
+  const findings: Finding[] = [];
+  const notice: Notice = (code, title, remedy, detail, compared, dispenserIds = []) =>
+    findings.push(makeFinding(code, 'circuit', circuit.id, circuit.name, { title, remedy, detail, compared: compared ? [compared] : [], dispenserIds }));
+  loadChecks(context, notice);
+  if (circuit.protection === 'fuse') {
+    notice('PR-03', 'A fuse is judged by its time-current curve', 'Check the melting time at the smallest short-circuit current against the curve',
+      short.amps === null ? '' : `Smallest short-circuit current ${ampsAgainstMinimum(short.amps)}.`);
+  } else tripChecks(context, notice);
+  if (short.behindOutput.length > 0) {
+    notice('PR-04', `${short.behindOutput.length} two-core ${short.behindOutput.length === 1 ? 'lane stands' : 'lanes stand'} behind outputs that limit their own short-circuit current`,
+      'Nothing to do: the output’s own limit governs there', 'A short circuit on such a lane does not reach the circuit’s protection.', undefined, short.behindOutput);
+  }
+  return findings;
+}
+
+function loadChecks({ circuit, figures }: CircuitContext, notice: Notice): void {
+  const rated = formatAmps(figures.ratingA);
+  if (figures.worstA > figures.ratingA + 1e-9) {
+    const k = figures.largestPassingK;
+    const smaller = k !== null && k > 0 ? `Set k to ${k} on ${circuit.name}` : 'Set a smaller k';
+    notice('PR-01', `${ampsAgainstMaximum(figures.worstA)} in the circuit, protection ${rated}`, `${smaller}, or split the circuit`,
+      `With all on: ${ampsAgainstMaximum(figures.allOnA)}.`, { name: 'worst current', value: figures.worstA, limit: figures.ratingA, unit: 'A' }, figures.worstSet);
+  } else if (figures.allOnA > figures.ratingA + 1e-9) {
+    notice('PR-05', `${ampsAgainstMaximum(figures.allOnA)} if all run at once, protection ${rated}`, 'Keep forcing under control',
+      `Under the limit it is ${ampsAgainstMaximum(figures.worstA)}. If the limit fails, the protection opens the circuit.`,
+      { name: 'current with all on', value: figures.allOnA, limit: figures.ratingA, unit: 'A' });
+  }
+}
+
+function tripChecks({ index, circuit, figures, short }: CircuitContext, notice: Notice): void {
+  const { tripA } = figures;
+  if (tripA === null || short.amps === null || short.at === null || short.amps >= tripA) return;
+  const compared = { name: 'smallest short-circuit current', value: short.amps, limit: tripA, unit: 'A' };
+  const needs = ampsAgainstMaximum(tripA);
+  const at = tagOf(index, short.at);
+  if (short.limitedBySupply) {
+    notice('PR-06', `The supply delivers ${ampsAgainstMinimum(short.amps)}, tripping at once takes ${needs}`,
+      'Choose a smaller rating, a characteristic that trips earlier, electronic protection, or a supply that delivers more',
+      'However thick the cable, the protection does not trip at once.', compared, [short.at]);
+    return;
+  }
+  const temperature = index.design.project.tripTempC;
+  const detail = `Short circuit at ${at}, lowest supply voltage, conductors at ${temperature} °C.`;
+  if (circuit.protection === 'electronic') {
+    notice('PR-07', `${ampsAgainstMinimum(short.amps)} at the far end, the protection takes ${needs}`, 'Lay a larger section, or choose a smaller rating', detail, compared, [short.at]);
+    return;
+  }
+  notice('PR-02', `${ampsAgainstMinimum(short.amps)} at the far end, the breaker takes ${needs} to trip at once`,
+    circuit.protection === 'breaker-C'
+      ? 'Choose characteristic B, a larger section, or electronic protection'
+      : 'Choose electronic protection, a larger section, or a smaller rating',
+    detail, compared, [short.at]);
+}
