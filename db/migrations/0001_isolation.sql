@@ -55,3 +55,23 @@ GRANT SELECT, INSERT, UPDATE, DELETE ON
 -- A version of a catalogue type never changes, and history only grows.
 GRANT SELECT, INSERT ON
   dispenser_types, module_types, cable_types, supply_types, greases, change_sets, change_items TO lanewright_app;
+--> statement-breakpoint
+-- A change set may move a row to a box that the same set creates, or swap two tags: inside it references and
+-- uniqueness are checked at its end. Outside of it they are checked at once.
+DO $$
+DECLARE c record;
+BEGIN
+  FOR c IN SELECT conrelid::regclass AS t, conname, contype, pg_get_constraintdef(oid) AS def FROM pg_constraint
+           WHERE connamespace = 'public'::regnamespace AND conrelid IN
+             (SELECT attrelid FROM pg_attribute WHERE attname = 'project_id' AND NOT attisdropped)
+             AND conrelid NOT IN ('change_sets'::regclass, 'imports'::regclass)
+             AND (contype = 'f' OR (contype = 'u' AND conname NOT LIKE '%\_key'))
+  LOOP
+    IF c.contype = 'f' THEN
+      EXECUTE format('ALTER TABLE %s ALTER CONSTRAINT %I DEFERRABLE INITIALLY IMMEDIATE', c.t, c.conname);
+    ELSE
+      EXECUTE format('ALTER TABLE %s DROP CONSTRAINT %I', c.t, c.conname);
+      EXECUTE format('ALTER TABLE %s ADD CONSTRAINT %I %s DEFERRABLE INITIALLY IMMEDIATE', c.t, c.conname, c.def);
+    END IF;
+  END LOOP;
+END $$;
