@@ -24,7 +24,7 @@ export function fillFrom(sections: readonly GroupSection[], from: ChannelRow, di
   const start = free.findIndex((r) => r.key === from.key);
   if (start < 0) return [];
   return dispenserIds.slice(0, free.length - start).map((dispenserId, i) => {
-    const row = free[start + i] as ChannelRow;
+    const row = free[start + i];
     return { dispenserId, moduleId: row.module.id, channel: row.channel, purpose: row.purpose };
   });
 }

@@ -1,6 +1,7 @@
 import { computed, inject, Injectable, signal } from '@angular/core';
 import { autoAssign, type Dispenser, type Point, type Purpose } from '#calc';
 import { ProjectStore } from '../core/project/project-store';
+import { type Mend, mendOf } from '../shared/findings/finding-mend';
 import type { LaneView } from '../shared/lane/lane-view';
 import { laneViewsOf } from '../shared/lane/lane-views';
 import { assignChange, fillFrom, missingPurposes, proposalChanges, unassignChanges } from './mapping-changes';
@@ -45,6 +46,16 @@ export class MappingViewStore {
     const design = this.project.design();
     const assessment = this.project.assessment();
     return design && assessment ? laneViewsOf(design, assessment) : new Map<string, LaneView>();
+  });
+  /** One-click mends of the findings shown, for those who may edit. */
+  readonly mends = computed<ReadonlyMap<string, Mend>>(() => {
+    const design = this.project.design();
+    const assessment = this.project.assessment();
+    if (!design || !assessment || !this.canEdit()) return new Map<string, Mend>();
+    return new Map(assessment.findings.flatMap((finding) => {
+      const mend = mendOf(finding, design, assessment);
+      return mend ? [[finding.key, mend] as const] : [];
+    }));
   });
   readonly open = computed<readonly OpenLane[]>(() => {
     const design = this.project.design();

@@ -1,12 +1,5 @@
-import type { Design } from '#calc';
 import type { ChangeNotice, DesignDocument, EditableCollection } from '#contract';
 import type { AnyRow } from './project-api';
-
-/** The calculation's input: the document's rows as they are, with the catalogue beside them. */
-export function designOf(document: DesignDocument): Design {
-  const { sequence: _sequence, catalogue, ...rows } = document;
-  return { ...rows, ...catalogue };
-}
 
 /** The document with one row put in its place (or added), or taken out where `row` is null. */
 export function withRow(document: DesignDocument, collection: EditableCollection | 'projects', id: string, row: AnyRow | null): DesignDocument {

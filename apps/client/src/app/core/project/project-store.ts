@@ -1,11 +1,12 @@
 import { computed, DestroyRef, inject, Injectable, signal } from '@angular/core';
 import { assess, type Assessment, type Design } from '#calc';
 import type { ChangeNotice, DesignDocument, EditableCollection, Problem, RowChange } from '#contract';
+import { designOf } from '#contract/design-of';
 import { firstValueFrom, type Subscription } from 'rxjs';
 import { v7 as newId } from 'uuid';
 import { problemOf } from '../api/problem';
 import { SessionStore } from '../session/session-store';
-import { designOf, withNotice, withRow } from './design-of';
+import { withNotice, withRow } from './document-rows';
 import { liveChanges } from './live-changes';
 import { type AnyRow, ProjectApi } from './project-api';
 import type { Conflict, SaveState } from './save-state';

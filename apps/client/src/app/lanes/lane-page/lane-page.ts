@@ -7,6 +7,7 @@ import { Caution, type CautionItem } from '../../shared/caution/caution';
 import { ExplainOpener } from '../../shared/explain/explain-opener';
 import { ExplainPanel } from '../../shared/explain/explain-panel';
 import { FindingItem } from '../../shared/findings/finding-item';
+import { type Mend, mendOf } from '../../shared/findings/finding-mend';
 import { Icon } from '../../shared/icon/icon';
 import { LoopDiagram } from '../../shared/lane/loop-diagram';
 import { EmptyState } from '../../shared/states/empty-state';
@@ -54,6 +55,14 @@ export class LanePage {
     return ready && rows ? electricRows(ready.design, ready.assessment, rows) : [];
   });
   protected readonly findings = computed<readonly Finding[]>(() => this.ready()?.assessment.findingsByLane.get(this.dispenserId()) ?? []);
+  protected readonly mends = computed<ReadonlyMap<string, Mend>>(() => {
+    const ready = this.ready();
+    if (!ready || !this.project.canEdit()) return new Map<string, Mend>();
+    return new Map(this.findings().flatMap((finding) => {
+      const mend = mendOf(finding, ready.design, ready.assessment);
+      return mend ? [[finding.key, mend] as const] : [];
+    }));
+  });
   protected readonly shown = linkedSignal<string, LaneFigureName | null>({ source: this.dispenserId, computation: () => null });
   protected readonly explanation = computed(() => {
     const ready = this.ready();
@@ -87,6 +96,10 @@ export class LanePage {
     const at = ids.indexOf(this.dispenserId());
     return { before: ids[at - 1] ?? null, after: ids[at + 1] ?? null };
   });
+
+  protected mendBy(mend: Mend): void {
+    void this.project.edit('circuits', mend.circuitId, { concurrencyLimit: mend.concurrencyLimit });
+  }
 
   protected explain(figure: LaneFigureName): void {
     const next = this.shown() === figure ? null : figure;

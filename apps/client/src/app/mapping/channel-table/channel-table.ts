@@ -1,9 +1,11 @@
 import { ChangeDetectionStrategy, Component, ElementRef, inject, input, output, signal } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { RouterLink } from '@angular/router';
-import { ampsAgainstMaximum, type Finding } from '#calc';
+import { ampsAgainstMaximum } from '#calc';
 import { LoadBar } from '../../shared/figure/load-bar';
 import { FindingMark } from '../../shared/findings/finding-mark';
+import type { Mend } from '../../shared/findings/finding-mend';
+import { Icon } from '../../shared/icon/icon';
 import { LaneLine } from '../../shared/lane/lane-line';
 import type { LaneView } from '../../shared/lane/lane-view';
 import { ChannelFinder } from '../channel-finder/channel-finder';
@@ -13,7 +15,7 @@ import type { OpenLane } from '../mapping-view-store';
 /** The channels of the modules shown, by group with its worst load. Arrow keys move, typing in a free channel searches. */
 @Component({
   selector: 'lw-channel-table',
-  imports: [ChannelFinder, FindingMark, LaneLine, LoadBar, MatButton, RouterLink],
+  imports: [ChannelFinder, FindingMark, Icon, LaneLine, LoadBar, MatButton, RouterLink],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './channel-table.html',
   styleUrl: './channel-table.css',
@@ -26,12 +28,14 @@ export class ChannelTable {
   readonly projectId = input.required<string>();
   readonly focusedKey = input.required<string | null>();
   readonly marked = input.required<ReadonlySet<string>>();
+  /** Edits that would mend a finding by themselves, by the finding's key. */
+  readonly mends = input.required<ReadonlyMap<string, Mend>>();
   readonly focusMoved = output<string>();
   readonly assigned = output<{ readonly lane: OpenLane; readonly row: ChannelRow }>();
   readonly filled = output<ChannelRow>();
   readonly unassigned = output<ReadonlySet<string>>();
   readonly markToggled = output<string>();
-  readonly mended = output<Finding>();
+  readonly mended = output<Mend>();
 
   private readonly host = inject<ElementRef<HTMLElement>>(ElementRef);
   protected readonly searching = signal<{ readonly key: string; readonly first: string } | null>(null);

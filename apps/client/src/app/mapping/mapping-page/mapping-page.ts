@@ -1,10 +1,9 @@
 import { ChangeDetectionStrategy, Component, computed, inject, viewChild } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { MatMenu, MatMenuItem, MatMenuTrigger } from '@angular/material/menu';
-import { Router } from '@angular/router';
-import type { Finding } from '#calc';
 import { ProjectStore } from '../../core/project/project-store';
 import { Segmented } from '../../shared/controls/segmented';
+import type { Mend } from '../../shared/findings/finding-mend';
 import { Icon } from '../../shared/icon/icon';
 import { ErrorState } from '../../shared/states/error-state';
 import { LoadingRows } from '../../shared/states/loading-rows';
@@ -28,7 +27,6 @@ import { UnmappedList } from '../unmapped-list/unmapped-list';
 export class MappingPage {
   protected readonly project = inject(ProjectStore);
   protected readonly view = inject(MappingViewStore);
-  private readonly router = inject(Router);
   private readonly table = viewChild(ChannelTable);
 
   protected readonly kinds: readonly { readonly value: Shown; readonly label: string }[] = [
@@ -56,7 +54,7 @@ export class MappingPage {
     setTimeout(() => this.table()?.goTo(moduleId));
   }
 
-  protected mend(finding: Finding): void {
-    void this.router.navigate(['/projects', this.projectId(), 'findings'], { fragment: finding.key });
+  protected mend(mend: Mend): void {
+    void this.project.edit('circuits', mend.circuitId, { concurrencyLimit: mend.concurrencyLimit });
   }
 }

@@ -23,6 +23,6 @@ export class UnmappedList {
   protected readonly someOn = computed(() => !this.allOn() && this.lanes().some((l) => this.selected().has(l.dispenser.id)));
 
   protected lacks(lane: OpenLane): string {
-    return lane.missing.map((purpose) => (purpose === 'control' ? 'output' : 'status')).join(', ');
+    return lane.missing.length === 2 ? 'both' : lane.missing[0] === 'control' ? 'output' : 'status';
   }
 }
