@@ -1,5 +1,6 @@
 import { projects } from '#schema';
 import type { NewProject } from '#contract';
+import { sql } from 'drizzle-orm';
 import { v7 as newId } from 'uuid';
 import { type Context, withOrg } from '../platform/context.ts';
 import type { Tx } from '../platform/database.ts';
@@ -40,7 +41,10 @@ async function insertProject(tx: Tx, context: Context, { id, copyHardwareFrom, .
   if (!project) throw new NotFound('project');
   const made: ChangedRow = { collection: 'projects', rowId: id, before: null, after: project };
   const copied = copyHardwareFrom ? await copyHardware(scope, copyHardwareFrom) : [];
+  // Groups name circuits, which are written after them.
+  await tx.execute(sql`set constraints all deferred`);
   await write(scope, { items: copied, answer: [] });
+  await tx.execute(sql`set constraints all immediate`);
   const summary = copyHardwareFrom ? 'Project created with the hardware of another' : 'Project created';
   await recordChangeSet(scope, context.personId, { id: newId(), summary }, [made, ...copied]);
   return project;

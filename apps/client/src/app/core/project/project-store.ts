@@ -64,7 +64,10 @@ export class ProjectStore {
     this.close();
     this.projectId = projectId;
     await this.reload();
-    this.events = liveChanges(projectId).subscribe((sequence) => void this.catchUp(sequence));
+    this.events = liveChanges(projectId, () => this.session.renew()).subscribe({
+      next: (sequence) => void this.catchUp(sequence),
+      error: () => undefined, // Nobody is signed in any more; the next request says so.
+    });
   }
 
   async reload(): Promise<void> {

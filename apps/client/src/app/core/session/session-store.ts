@@ -2,6 +2,7 @@ import { computed, inject, Injectable, signal } from '@angular/core';
 import type { Permission, Role, Session } from '#contract';
 import { rolesAllow } from '#contract/permissions';
 import { firstValueFrom } from 'rxjs';
+import { refreshOnce } from './refresh-once';
 import { SessionApi } from './session-api';
 
 /** Who is signed in on this device, and what the server would let them do. */
@@ -39,6 +40,11 @@ export class SessionStore {
   async signOut(): Promise<void> {
     await firstValueFrom(this.api.signOut());
     this.state.set(null);
+  }
+
+  /** Renews the sign-in of this device. Rejects where it has ended. */
+  renew(): Promise<unknown> {
+    return refreshOnce(this.api);
   }
 
   /** The server no longer knows this device: sign-in begins anew. */

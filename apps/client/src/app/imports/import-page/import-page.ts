@@ -5,6 +5,7 @@ import { RouterLink } from '@angular/router';
 import { problemText } from '../../core/api/problem';
 import { ProjectStore } from '../../core/project/project-store';
 import { Segmented } from '../../shared/controls/segmented';
+import { ErrorState } from '../../shared/states/error-state';
 import { Notice } from '../../shared/states/notice';
 import { PageHead } from '../../shared/states/page-head';
 import { ColumnList } from '../column-list/column-list';
@@ -14,7 +15,7 @@ import { RowTable } from '../row-table/row-table';
 
 @Component({
   selector: 'lw-import-page',
-  imports: [ColumnList, FileDrop, MatButton, MatProgressBar, Notice, RouterLink, PageHead, RowTable, Segmented],
+  imports: [ColumnList, ErrorState, FileDrop, MatButton, MatProgressBar, Notice, RouterLink, PageHead, RowTable, Segmented],
   providers: [ImportViewStore],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './import-page.html',
