@@ -1,7 +1,9 @@
 import { CdkFixedSizeVirtualScroll, CdkVirtualForOf, CdkVirtualScrollViewport } from '@angular/cdk/scrolling';
-import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, input, linkedSignal } from '@angular/core';
+import { MatIconButton } from '@angular/material/button';
 import type { ImportPreview, ImportRow } from '#contract';
 import { FindingMark } from '../../shared/findings/finding-mark';
+import { Icon } from '../../shared/icon/icon';
 
 const ACTIONS: Readonly<Record<ImportRow['action'], string>> = {
   create: 'Create', update: 'Change', same: 'Same', hold: 'Held back', skip: 'Skip',
@@ -11,7 +13,7 @@ const LEADING = ['tag', 'description'];
 /** Row by row what the import would do, with each problem's cell and remedy. */
 @Component({
   selector: 'lw-row-table',
-  imports: [CdkFixedSizeVirtualScroll, CdkVirtualForOf, CdkVirtualScrollViewport, FindingMark],
+  imports: [CdkFixedSizeVirtualScroll, CdkVirtualForOf, CdkVirtualScrollViewport, FindingMark, Icon, MatIconButton],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './row-table.html',
   styleUrl: './row-table.css',
@@ -21,6 +23,9 @@ export class RowTable {
   readonly rows = input.required<readonly ImportRow[]>();
 
   protected readonly actions = ACTIONS;
+  protected readonly whys: Readonly<Record<string, string>> = { blank: 'A blank row', 'repeated-heading': 'The headings again', totals: 'A row of totals' };
+  /** The row whose problems stand below in full; another preview closes it. */
+  protected readonly picked = linkedSignal<readonly ImportRow[], ImportRow | null>({ source: this.rows, computation: () => null });
   protected readonly fields = computed(() => {
     const mapped = new Set(this.preview().columns.map((c) => c.field));
     return this.preview().fields.filter((f) => mapped.has(f.key) && !LEADING.includes(f.key));
