@@ -35,6 +35,6 @@ test('two people change the same field: both values are shown, and the choice is
   await expect(dialog).toContainText('Head pulley, colleague');
   await expect(dialog).toContainText('Head pulley, mine');
   await dialog.getByRole('button', { name: /mine/i }).click();
-  await expect(page.getByText('All saved')).toBeVisible();
+  await expect(page.getByText('All saved').first()).toBeVisible();
   expect((await designOf(page, project)).points.find((p) => p.tag === 'GC1-L01')?.description).toBe('Head pulley, mine');
 });

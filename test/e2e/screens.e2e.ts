@@ -12,7 +12,7 @@ const screens: readonly { readonly name: string; readonly path: string; readonly
   { name: 'hardware', path: 'hardware', shows: /PLC1/ },
   { name: 'findings', path: 'findings', shows: /A in the group/ },
   { name: 'import', path: 'import', shows: /Drop a tag list/ },
-  { name: 'history', path: 'history', shows: /History/ },
+  { name: 'history', path: 'history', shows: /who, when and what/ },
 ];
 
 for (const [size, viewport] of Object.entries(sizes)) {

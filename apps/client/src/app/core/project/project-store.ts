@@ -6,7 +6,7 @@ import { firstValueFrom, type Subscription } from 'rxjs';
 import { v7 as newId } from 'uuid';
 import { problemOf } from '../api/problem';
 import { SessionStore } from '../session/session-store';
-import { withNotice, withRow } from './document-rows';
+import { withChanges, withNotice, withRow } from './document-rows';
 import { liveChanges } from './live-changes';
 import { type AnyRow, ProjectApi } from './project-api';
 import type { Conflict, SaveState } from './save-state';
@@ -101,11 +101,18 @@ export class ProjectStore {
     return this.send(id, () => this.patch(collection, before, values));
   }
 
-  /** Several rows in one change set: all or none. */
+  /** Several rows in one change set: all or none. Shown at once, and taken back whole where the server refuses it. */
   apply(summary: string, changes: readonly RowChange[]): Promise<boolean> {
+    const versions = new Map(changes.map((c) => [c.id, this.row(c.collection, c.id)?.version ?? 0]));
+    this.doc.update((document) => document && withChanges(document, changes));
     return this.enqueue(async () => {
-      const set = { id: newId(), summary, changes: changes.map((c) => this.withVersion(c)) };
-      this.take(await firstValueFrom(this.api.apply(this.projectId ?? '', set)));
+      const named = changes.map((c) => (c.op === 'create' ? c : { ...c, version: this.versionOf(c, versions) }));
+      try {
+        this.take(await firstValueFrom(this.api.apply(this.projectId ?? '', { id: newId(), summary, changes: named })));
+      } catch (error) {
+        await this.reload();
+        throw error;
+      }
     });
   }
 
@@ -137,10 +144,9 @@ export class ProjectStore {
     this.doc.update((document) => document && withNotice(document, notice));
   }
 
-  private withVersion(change: RowChange): RowChange {
-    return change.op === 'create' || change.version !== undefined
-      ? change
-      : { ...change, version: this.row(change.collection, change.id)?.version ?? 0 };
+  /** The row's version when its turn comes; a row that was taken from the screen has the one that it had then. */
+  private versionOf({ collection, id }: RowChange, shown: ReadonlyMap<string, number>): number {
+    return this.row(collection, id)?.version ?? shown.get(id) ?? 0;
   }
 
   private async send(id: string, work: () => Promise<void>): Promise<void> {

@@ -1,5 +1,5 @@
 import type { Finding, Severity } from '#calc';
-import { codesOf, filtered } from './finding-filter';
+import { codesOf, filtered, runsOf } from './finding-filter';
 
 const finding = (code: string, severity: Severity, label: string): Finding => ({
   key: `${code}/${label}`, code, severity, subject: { kind: 'dispenser', id: label, label }, title: '20.9 V at the dispenser, lowest 21.0 V',
@@ -24,4 +24,11 @@ describe('filtered', () => {
 
 it('codesOf names each code once', () => {
   expect(codesOf(all)).toEqual(['PL-04', 'VD-01']);
+});
+
+describe('runsOf', () => {
+  it('puts findings that say the same into one run, in the order of the first', () => {
+    const list = [finding('MP-01', 'warning', 'A'), finding('VD-01', 'error', 'B'), finding('MP-01', 'warning', 'C')];
+    expect(runsOf(list).map((run) => run.findings.map((f) => f.subject.label))).toEqual([['A', 'C'], ['B']]);
+  });
 });

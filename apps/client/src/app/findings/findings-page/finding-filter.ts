@@ -28,3 +28,24 @@ export function filtered(findings: readonly Finding[], filter: FindingFilter): r
 
 /** The codes that occur, each once, in order. */
 export const codesOf = (findings: readonly Finding[]): readonly string[] => [...new Set(findings.map((f) => f.code))].sort();
+
+/** Findings that say the same of several subjects. */
+export interface FindingRun {
+  readonly key: string;
+  readonly findings: readonly Finding[];
+}
+
+/** From this many on, findings that say the same stand in one row that opens. */
+export const FOLD_FROM = 4;
+
+/** Neighbours with the same code, title and remedy belong together; their order stays. */
+export function runsOf(findings: readonly Finding[]): readonly FindingRun[] {
+  const runs = new Map<string, Finding[]>();
+  for (const finding of findings) {
+    const key = `${finding.code} ${finding.title} ${finding.remedy}`;
+    const run = runs.get(key);
+    if (run) run.push(finding);
+    else runs.set(key, [finding]);
+  }
+  return [...runs].map(([key, own]) => ({ key, findings: own }));
+}

@@ -8,6 +8,7 @@ import { Icon } from '../../shared/icon/icon';
 const ACTIONS: Readonly<Record<ImportRow['action'], string>> = {
   create: 'Create', update: 'Change', same: 'Same', hold: 'Held back', skip: 'Skip',
 };
+const SKIPS: ReadonlyMap<string, string> = new Map([['blank', 'A blank row'], ['repeated-heading', 'The headings again'], ['totals', 'A row of totals']]);
 const LEADING = ['tag', 'description'];
 
 /** Row by row what the import would do, with each problem's cell and remedy. */
@@ -23,13 +24,16 @@ export class RowTable {
   readonly rows = input.required<readonly ImportRow[]>();
 
   protected readonly actions = ACTIONS;
-  protected readonly whys: Readonly<Record<string, string>> = { blank: 'A blank row', 'repeated-heading': 'The headings again', totals: 'A row of totals' };
   /** The row whose problems stand below in full; another preview closes it. */
   protected readonly picked = linkedSignal<readonly ImportRow[], ImportRow | null>({ source: this.rows, computation: () => null });
   protected readonly fields = computed(() => {
     const mapped = new Set(this.preview().columns.map((c) => c.field));
     return this.preview().fields.filter((f) => mapped.has(f.key) && !LEADING.includes(f.key));
   });
+
+  protected whyOf(why: string): string {
+    return SKIPS.get(why) ?? why;
+  }
 
   protected byRow = (_index: number, row: ImportRow): number => row.row;
 

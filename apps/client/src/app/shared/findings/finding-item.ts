@@ -12,7 +12,7 @@ import { FindingMark } from './finding-mark';
   template: `
     <lw-finding-mark [kind]="finding().severity" />
     <div>
-      <b>{{ finding().title }}</b>&ngsp;
+      <b>{{ finding().title }}.</b>&ngsp;
       @if (finding().detail; as detail) { {{ detail }}&ngsp; }
       <span class="mend">{{ finding().remedy }}</span>&ngsp;
       <span class="code">{{ finding().code }}</span>&ngsp;

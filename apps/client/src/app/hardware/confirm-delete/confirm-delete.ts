@@ -1,0 +1,32 @@
+import { ChangeDetectionStrategy, Component, inject } from '@angular/core';
+import { MatButton } from '@angular/material/button';
+import { MAT_DIALOG_DATA, MatDialogActions, MatDialogClose, MatDialogContent, MatDialogTitle } from '@angular/material/dialog';
+
+/** What is deleted, what goes with it, and what has to be freed first. */
+export interface Deletion {
+  readonly name: string;
+  readonly goes: string;
+  /** What still stands on it, `2 controllers, 1 supply`; empty: nothing. */
+  readonly held: string;
+}
+
+/** Names what goes before it goes. Answers true to delete. */
+@Component({
+  selector: 'lw-confirm-delete',
+  imports: [MatButton, MatDialogActions, MatDialogClose, MatDialogContent, MatDialogTitle],
+  changeDetection: ChangeDetectionStrategy.OnPush,
+  styles: 'mat-dialog-content { display: grid; gap: 10px; }',
+  template: `
+    <h2 matDialogTitle>Delete {{ data.name }}?</h2>
+    <mat-dialog-content>
+      <p>{{ data.goes }} This cannot be undone.</p>
+      @if (data.held) { <p>Still on it: {{ data.held }}. It can only go when these are gone or moved.</p> }
+    </mat-dialog-content>
+    <mat-dialog-actions align="end">
+      <button matButton type="button" [mat-dialog-close]="false">Keep</button>
+      <button matButton="filled" type="button" [mat-dialog-close]="true">Delete</button>
+    </mat-dialog-actions>`,
+})
+export class ConfirmDelete {
+  protected readonly data = inject<Deletion>(MAT_DIALOG_DATA);
+}
