@@ -258,14 +258,17 @@ describe('a change set', () => {
 });
 
 describe('a project', () => {
-  it('starts with the hardware of another', async () => {
+  it('starts with the hardware and the policies of another', async () => {
     const id = newId();
+    const before = (await engineer.get(project.url).expect(200)).body as { version: number };
+    await engineer.patch(project.url).set('If-Match', `"${before.version}"`).send({ relayLifeYears: 7 }).expect(200);
     await engineer.post('/api/v1/projects').send({ id, name: 'Second line', copyHardwareFrom: project.id }).expect(201);
     const design = (await engineer.get(`/api/v1/projects/${id}/design`).expect(200)).body;
     expect(sorted(rowsOf(design.modules).map((m) => m['name']))).toEqual(['DI1', 'DO1']);
     expect(design.moduleGroups).toHaveLength(4);
     expect(sorted(rowsOf(design.cableNodes).map((n) => n['location']))).toEqual(['+JB1', '+JB2', '+JB8', '+JB9']);
     expect(design.points).toEqual([]);
+    expect(design.project).toMatchObject({ name: 'Second line', relayLifeYears: 7 });
     expect(design.sequence).toBe(1);
     const boxes = rowsOf(design.cableNodes);
     const far = boxes.find((n) => n['location'] === '+JB2');
@@ -273,10 +276,12 @@ describe('a project', () => {
   });
 
   it('changes its policies with a version', async () => {
-    const answer = await engineer.patch(project.url).set('If-Match', '"1"').send({ sparePercent: 10 }).expect(200);
-    expect(answer.body).toMatchObject({ sparePercent: 10, version: 2 });
-    await engineer.patch(project.url).set('If-Match', '"1"').send({ sparePercent: 15 }).expect(412);
-    await engineer.patch(project.url).set('If-Match', '"2"').send({ timeZone: 'Nowhere' }).expect(422);
+    const { version } = (await engineer.get(project.url).expect(200)).body as { version: number };
+    const named = (n: number) => engineer.patch(project.url).set('If-Match', `"${n}"`);
+    const answer = await named(version).send({ sparePercent: 10 }).expect(200);
+    expect(answer.body).toMatchObject({ sparePercent: 10, version: version + 1 });
+    await named(version).send({ sparePercent: 15 }).expect(412);
+    await named(version + 1).send({ timeZone: 'Nowhere' }).expect(422);
     await engineer.post('/api/v1/projects').send({ id: newId(), name: 'Gallery conveyors' }).expect(409);
   });
 

@@ -28,7 +28,7 @@ export const projects = resource('projects', 'projects', {
 fits<Fits<RowOf<typeof projects>, calc.Versioned<calc.Project>>>();
 export type ProjectRow = RowOf<typeof projects>;
 
-/** A new project; with `copyHardwareFrom` it starts with that project's cabinets, controllers, modules, supplies, circuits and boxes. */
+/** A new project; with `copyHardwareFrom` it starts with that project's policies, cabinets, controllers, modules, supplies, circuits and boxes. */
 export const NewProject = Type.Object({
   id: Uuid, name: Name(), description: Type.Optional(Text(2000)), timeZone: Type.Optional(Name(64)),
   copyHardwareFrom: Type.Optional(Uuid),

@@ -1,10 +1,8 @@
 import { v7 as newId } from 'uuid';
 import type { CollectionName, Row, Scope } from '../platform/editing/collection.ts';
 import { findPage } from '../platform/editing/rows.ts';
-import { NotFound } from '../platform/problems.ts';
 import type { ChangedRow } from './change-sets/outcome.ts';
 import { collectionNamed } from './collections.ts';
-import { findProject } from './project-queries.ts';
 
 /** Those that others refer to first, and the fields that refer inside the project. */
 const hardware: readonly { readonly name: CollectionName; readonly references: readonly string[] }[] = [
@@ -20,7 +18,6 @@ const MOST_ROWS = 100_000;
 
 /** The rows of another project's hardware as new rows of this one, with identifiers of their own. */
 export async function copyHardware(scope: Scope, fromProjectId: string): Promise<ChangedRow[]> {
-  if (!(await findProject(scope.tx, fromProjectId))) throw new NotFound('project to copy from');
   const source = { ...scope, projectId: fromProjectId };
   const rows: { name: CollectionName; references: readonly string[]; row: Row }[] = [];
   for (const { name, references } of hardware) {

@@ -35,7 +35,8 @@ export async function createProject(context: Context, wanted: NewProject): Promi
 }
 
 async function insertProject(tx: Tx, context: Context, { id, copyHardwareFrom, ...values }: NewProject): Promise<Row> {
-  await tx.insert(projects).values({ id, orgId: context.orgId, ...values });
+  const policies = copyHardwareFrom ? await policiesOf(tx, copyHardwareFrom) : {};
+  await tx.insert(projects).values({ ...policies, ...values, id, orgId: context.orgId });
   const scope = { tx, orgId: context.orgId, projectId: id };
   const project = await findProject(tx, id);
   if (!project) throw new NotFound('project');
@@ -48,4 +49,12 @@ async function insertProject(tx: Tx, context: Context, { id, copyHardwareFrom, .
   const summary = copyHardwareFrom ? 'Project created with the hardware of another' : 'Project created';
   await recordChangeSet(scope, context.personId, { id: newId(), summary }, [made, ...copied]);
   return project;
+}
+
+/** The rules by which another project is checked: its hardware was laid out by them. @throws {NotFound} */
+async function policiesOf(tx: Tx, projectId: string): Promise<Partial<typeof projects.$inferInsert>> {
+  const source = await findProject(tx, projectId);
+  if (!source) throw new NotFound('project to copy from');
+  const { id: _id, version: _version, name: _name, description: _description, ...policies } = source;
+  return policies as Partial<typeof projects.$inferInsert>;
 }
