@@ -44,7 +44,7 @@ export class CatalogueStore {
   async load(): Promise<void> {
     this.notLoaded.set(null);
     try {
-      this.catalogue.set((await firstValueFrom(this.api.read())) as unknown as Readonly<Record<Kind, readonly Entry[]>>);
+      this.catalogue.set(await firstValueFrom(this.api.read()));
     } catch (error) {
       this.notLoaded.set(problemOf(error));
     }

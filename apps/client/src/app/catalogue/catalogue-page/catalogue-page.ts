@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, effect, ElementRef, inject, input, signal, untracked, viewChild } from '@angular/core';
+import { ChangeDetectionStrategy, Component, effect, ElementRef, inject, input, linkedSignal, signal, untracked, viewChild } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { Router } from '@angular/router';
 import { Segmented } from '../../shared/controls/segmented';
@@ -9,6 +9,7 @@ import { LoadingRows } from '../../shared/states/loading-rows';
 import { Notice } from '../../shared/states/notice';
 import { PageHead } from '../../shared/states/page-head';
 import { CatalogueStore, type Open } from '../catalogue-store';
+import type { Kind } from '../fields/field';
 import { isKind } from '../fields/kind-views';
 import { TypeForm } from '../type-form/type-form';
 import { TypePanel } from '../type-panel/type-panel';
@@ -20,7 +21,7 @@ import { TypeTable } from '../type-table/type-table';
   imports: [EmptyState, ErrorState, Icon, LoadingRows, MatButton, Notice, PageHead, Segmented, TypeForm, TypePanel, TypeTable],
   providers: [CatalogueStore],
   changeDetection: ChangeDetectionStrategy.OnPush,
-  host: { class: 'page', '(keydown.escape)': 'leave(null)' },
+  host: { class: 'page', '(keydown.escape)': 'back()' },
   templateUrl: './catalogue-page.html',
   styleUrl: './catalogue-page.css',
 })
@@ -31,7 +32,9 @@ export class CataloguePage {
   private readonly router = inject(Router);
   private readonly host = inject<ElementRef<HTMLElement>>(ElementRef);
   private readonly form = viewChild(TypeForm);
-  /** Where to go once what was typed is given up; undefined: nothing is asked. */
+  /** Kind pressed in the row of kinds; it goes back when what was typed is kept. */
+  protected readonly chosen = linkedSignal(() => this.store.view().kind);
+  /** Where to go once what was typed is given up; null: nothing is asked. */
   protected readonly asked = signal<{ readonly go: () => void } | null>(null);
 
   constructor() {
@@ -41,12 +44,15 @@ export class CataloguePage {
     });
     // The keyboard follows what opens beside the table.
     effect(() => {
-      if (this.store.open()) setTimeout(() => this.host.nativeElement.querySelector<HTMLElement>('.beside h2')?.focus());
+      const open = this.store.open();
+      this.asked.set(null);
+      if (open) setTimeout(() => this.host.nativeElement.querySelector<HTMLElement>('.beside h2')?.focus());
     });
     void this.store.load();
   }
 
-  protected showKind(kind: string): void {
+  protected showKind(kind: Kind): void {
+    this.chosen.set(kind);
     this.unlessTyped(() => void this.router.navigate([], { queryParams: { kind }, queryParamsHandling: 'merge' }));
   }
 
@@ -59,8 +65,8 @@ export class CataloguePage {
     if (id) this.store.put({ mode: 'version', id });
   }
 
-  /** Closes the form for the type it came from, and a type for the table. */
-  protected closeForm(): void {
+  /** Leaves a new version for the type it came from, and anything else for the table. */
+  protected back(): void {
     const open = this.store.open();
     this.leave(open?.mode === 'version' ? { mode: 'read', id: open.id } : null);
   }
@@ -71,6 +77,11 @@ export class CataloguePage {
       this.store.put(open);
       if (!open && former) this.host.nativeElement.querySelector<HTMLElement>(`[data-entry="${former}"]`)?.focus();
     });
+  }
+
+  protected keep(): void {
+    this.asked.set(null);
+    this.chosen.set(this.store.view().kind);
   }
 
   protected discard(): void {

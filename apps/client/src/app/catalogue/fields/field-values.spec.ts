@@ -1,3 +1,4 @@
+// eslint-disable-next-line lanewright/import-directions -- holds the forms against the API's own schemas; nothing of it reaches the bundle
 import { catalogueResources } from '#contract';
 import { Value } from 'typebox/value';
 import { type Entry, fieldsOf, type NumberField } from './field';

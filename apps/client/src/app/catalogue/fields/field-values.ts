@@ -32,14 +32,17 @@ export const typedList = (text: string, field: Field): readonly string[] =>
 export function fieldText(field: Field, row: Entry): string {
   if (field.kind === 'choice' && field.group) return valueAt(row, field.group) ? 'yes' : 'no';
   const value = valueAt(row, field.key);
-  if (value === null || value === undefined || value === '' || (Array.isArray(value) && value.length === 0)) return NOTHING;
+  if (value === null || value === undefined || value === '' || (Array.isArray(value) && value.length === 0)) return field.empty ?? NOTHING;
   if (field.kind === 'number') {
     const figures = (Array.isArray(value) ? value : [value]).map((one) => formatNumber(shown(Number(one), field)));
     return field.unit ? withUnit(figures.join(', '), field.unit) : figures.join(', ');
   }
-  if (field.kind === 'choice') return field.choices.find((choice) => choice.value === String(value))?.label ?? String(value);
-  return Array.isArray(value) ? value.join(', ') : String(value);
+  if (field.kind === 'choice') return field.choices.find((choice) => choice.value === words(value))?.label ?? words(value);
+  return words(value);
 }
+
+/** A value as it stands in the row; of several, parted by commas. */
+export const words = (value: unknown): string => (Array.isArray(value) ? value.map(words).join(', ') : typeof value === 'string' ? value : JSON.stringify(value));
 
 /** What a form starts with: a row's values, or for a new type nothing but the first of each choice. */
 export function formValueOf(view: KindView, row: Entry | null): Record<string, FieldValue> {
@@ -53,13 +56,13 @@ function fieldValueOf(field: Field, row: Entry): FieldValue {
   if (field.kind === 'choice') {
     if (field.group) return valueAt(row, field.group) ? 'yes' : 'no';
     // A value that is not offered belongs to a field that is not asked for this row.
-    return field.choices.some((choice) => choice.value === String(value)) ? String(value) : emptyOf(field);
+    return field.choices.find((choice) => choice.value === words(value))?.value ?? emptyOf(field);
   }
   if (value === null || value === undefined) return emptyOf(field);
   if (field.kind === 'number') {
     return (Array.isArray(value) ? value : [value]).map((one) => String(shown(Number(one), field))).join('; ');
   }
-  return field.kind === 'choices' ? (value as readonly string[]) : Array.isArray(value) ? value.join(', ') : String(value);
+  return field.kind === 'choices' ? (value as readonly string[]) : words(value);
 }
 
 /** Whether a field is asked while the others have these values; one that hangs on a field not asked is not. */

@@ -15,6 +15,10 @@ interface FieldBase {
   readonly label: string;
   /** What it is, in a few words. */
   readonly hint: string;
+  /** What it means when nothing stands here, `not stated`; left out: an en dash. */
+  readonly empty?: string;
+  /** How it is typed, said only in the form. */
+  readonly typed?: string;
   /** May be left empty; the row then has null, or lacks the key inside a group that may lack it. */
   readonly optional?: true;
   /** Asked only while another field has one of these values. */

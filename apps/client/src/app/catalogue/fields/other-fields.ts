@@ -23,7 +23,7 @@ export const cableView: KindView = {
       title: 'Cores', fields: [
         { kind: 'number', key: 'cores', label: 'Cores', hint: 'How many it has.', whole: true, min: 1, max: 200 },
         { kind: 'choice', key: 'coreMarking', label: 'Marking', hint: 'How cores are told apart.', choices: sameWords(['numbered', 'coloured']) },
-        { kind: 'text', key: 'coreColours', label: 'Colours', hint: 'IEC 60757 codes in the order of the cores, parted by commas: BN, WH, BU, BK.', max: 10, list: { least: 1, most: 200 }, only: coloured, otherwise: [] },
+        { kind: 'text', key: 'coreColours', label: 'Colours', hint: 'IEC 60757 codes in the order of the cores.', typed: 'Parted by commas: BN, WH, BU, BK.', max: 10, list: { least: 1, most: 200 }, only: coloured, otherwise: [] },
       ],
     },
   ],
@@ -46,7 +46,7 @@ export const supplyView: KindView = {
       { ...AMPS, key: 'ratedA', label: 'Rated current', hint: 'What it delivers for good.', above: 0, max: 1000 },
       { kind: 'number', key: 'deratingFromC', label: 'Derates from', hint: 'Above this temperature the rating falls.', unit: '°C', min: -40, max: 100 },
       { kind: 'number', key: 'deratingPercentPerK', label: 'Derates by', hint: 'Of the rating, for each kelvin above.', unit: '%/K', min: 0, max: 100 },
-      { kind: 'number', key: 'tolerancePercent', label: 'Tolerance', hint: 'How far the voltage strays from the set one. Empty: not stated, then 24 V − 15 % counts.', unit: '%', min: 0, max: 50, optional: true },
+      { kind: 'number', key: 'tolerancePercent', label: 'Tolerance', hint: 'How far the voltage strays from the set one.', empty: 'not stated, 24 V − 15 % counts', unit: '%', min: 0, max: 50, optional: true },
       { ...AMPS, key: 'shortCircuitA', label: 'Short-circuit current', hint: 'What it can deliver to trip a breaker.', above: 0, max: 10_000 },
       {
         kind: 'choice', key: 'extraLowVoltage', label: 'Circuit', hint: 'Whether its 0 V is earthed.',

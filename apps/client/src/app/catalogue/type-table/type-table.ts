@@ -1,6 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
-import { type Entry, fieldsOf, type KindView } from '../fields/field';
-import { fieldText, valueAt } from '../fields/field-values';
+import { NOTHING } from '#calc';
+import { type Entry, type Field, fieldsOf, type KindView } from '../fields/field';
+import { fieldText, formValueOf, isAsked, valueAt, words } from '../fields/field-values';
 
 /** The latest version of each type with its main data; a click or Enter opens it. */
 @Component({
@@ -21,16 +22,20 @@ export class TypeTable {
     return field ? [{ key, head, field, num: field.kind === 'number', unit: field.kind === 'number' ? (field.unit ?? '') : '' }] : [];
   }));
   protected readonly rows = computed(() => this.entries().map((entry) => {
-    const cells = this.columns().map(({ key, head, field, num, unit }) => {
-      const text = fieldText(field, entry);
-      return { key, head, num, text: shortText(text, unit, valueAt(entry, key)), full: text };
-    });
-    return { entry, cells, summary: cells.filter((c) => c.text !== '–').map((c) => (c.num ? `${c.head.toLowerCase()} ${c.full}` : c.text)).join('; ') };
+    const values = formValueOf(this.view(), entry);
+    const cells = this.columns().map((column) => ({ ...column, ...cellText(column.field, entry, isAsked(this.view(), column.field, values)) }));
+    const parts = cells.filter((cell) => cell.text !== NOTHING).map((cell) => (cell.num ? `${cell.head.toLowerCase()} ${cell.full}` : cell.text));
+    return { entry, cells, summary: parts.join('; ') };
   }));
 }
 
-/** A cell's text: the unit stands in the head, and of a choice only the value, which may be none of those offered. */
-function shortText(text: string, unit: string, value: unknown): string {
-  if (unit !== '') return text.replace(`\u2009${unit}`, '');
-  return typeof value === 'string' ? value : text.split(', ').length > 1 && typeof value === 'number' ? String(value) : text;
+/** A cell's text, the unit being in the head, and the same with its unit, which no line break parts from the figure. */
+function cellText(field: Field, entry: Entry, asked: boolean): { readonly text: string; readonly full: string } {
+  const value = valueAt(entry, field.key);
+  const nothing = !asked || value === null || (Array.isArray(value) && value.length === 0);
+  if (nothing) return { text: NOTHING, full: NOTHING };
+  const full = fieldText(field, entry).replaceAll('\u2009', '\u202f');
+  // The words behind a choice are for the panel.
+  if (field.kind === 'choice') return { text: words(value), full };
+  return { text: field.kind === 'number' && field.unit ? full.replace(`\u202f${field.unit}`, '') : full, full };
 }
