@@ -9,7 +9,7 @@ const screens: readonly { readonly name: string; readonly path: string; readonly
   { name: 'overview', path: 'overview', shows: /GL1/ },
   { name: 'points', path: 'points', shows: /GC1-L01/ },
   { name: 'mapping', path: 'mapping', shows: /46 of 60 dispensers mapped/ },
-  { name: 'hardware', path: 'hardware', shows: /PLC1/ },
+  { name: 'hardware', path: 'hardware', shows: /2 cabinets, 12 modules/ },
   { name: 'findings', path: 'findings', shows: /A in the group/ },
   { name: 'import', path: 'import', shows: /Drop a tag list/ },
   { name: 'history', path: 'history', shows: /who, when and what/ },

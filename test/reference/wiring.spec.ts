@@ -141,3 +141,19 @@ describe(`trunk with five tees against ${judge}`, () => {
     expect(figures(design, 'L5').aloneV).toBeCloseTo(sim.get('v(cp5)-v(cn5)')!, 7);
   });
 });
+
+describe('smallest short-circuit current against the simulator’s fault loops (ids 4-016 to 4-018)', () => {
+  it.each([
+    { id: '4-016', metres: 50, mm2: 1.5, temperatureC: 20 },
+    { id: '4-017', metres: 50, mm2: 1.5, temperatureC: 70 },
+    { id: '4-018', metres: 100, mm2: 0.75, temperatureC: 70 },
+  ])('$id: $metres m of $mm2 mm² at $temperatureC °C, 0.1 Ω before it', ({ id, metres, mm2, temperatureC }) => {
+    const design = buildDesign({
+      project: buildProject({ tripTempC: temperatureC }),
+      supplyTypes: [buildSupplyType({ tolerancePercent: 0, shortCircuitA: 1000 })],
+      supplies: [buildSupply({ internalOhm: 0.1 })],
+      lanes: [buildLane('A', { cableLengthM: metres, crossSectionMm2: mm2 })],
+    });
+    expect(assess(design).circuits.get('circuit')!.shortCircuitA).toBeCloseTo(reference(id).number, 5);
+  });
+});

@@ -1,5 +1,5 @@
 import type { Electrics, LaneContext } from './assess-context.ts';
-import { unstatedZones, zoneFinding } from './area/zone.ts';
+import { surfaceFinding, unstatedZones, zoneFinding } from './area/zone.ts';
 import type { Finding, Severity } from './findings.ts';
 import { addressFindings } from './hardware/address.ts';
 import { channelFindings, loadFindings } from './hardware/load-findings.ts';
@@ -14,14 +14,14 @@ import { laneCableFindings, trunkFindings, voltageFindings } from './wiring/volt
 /** Findings of one lane. */
 export function laneFindings(lane: LaneContext): Finding[] {
   const point = lane.index.points.get(lane.dispenser.pointId);
-  const zone = point ? zoneFinding(point, lane.dispenser.id, lane.type) : null;
+  const area = point ? [zoneFinding(point, lane.dispenser.id, lane.type), surfaceFinding(point, lane.dispenser.id, lane.type)] : [];
   return [
     ...laneMappingFindings(lane),
     ...laneCableFindings(lane),
     ...voltageFindings(lane),
     ...channelFindings(lane),
     ...signalFindings(lane),
-    ...(zone ? [zone] : []),
+    ...area.filter((finding) => finding !== null),
   ];
 }
 

@@ -75,7 +75,12 @@ export function typeOf(index: DesignIndex, dispenser: Dispenser): DispenserType 
 
 /** How a dispenser is wired: as its row says, else as its type is made; null while neither is known. */
 export function wiringOf(index: DesignIndex, dispenser: Dispenser): Dispenser['wiring'] {
-  return dispenser.wiring ?? typeOf(index, dispenser)?.wiring ?? null;
+  return wiringBy(dispenser, typeOf(index, dispenser));
+}
+
+/** The same rule where row and type are at hand. */
+export function wiringBy(dispenser: Dispenser | null, type: DispenserType | null): Dispenser['wiring'] {
+  return dispenser?.wiring ?? type?.wiring ?? null;
 }
 
 /** The type of the module that an assignment names; undefined where the row is missing. */

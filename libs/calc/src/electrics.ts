@@ -1,11 +1,11 @@
 import type { CircuitContext, Electrics } from './assess-context.ts';
 import type { SupplyFigures } from './assessment.ts';
 import type { DesignIndex } from './design-index.ts';
-import { circuitFigures, circuitLoads, standingA } from './hardware/circuit-load.ts';
+import { circuitFigures } from './hardware/circuit-load.ts';
 import { largestPassingK } from './hardware/largest-k.ts';
-import { type LimitOf, sumLoads } from './hardware/load-sum.ts';
+import type { LimitOf } from './hardware/load-sum.ts';
 import { channelLoad, type HardwareLoads, hardwareLoads, type RatedSum } from './hardware/loads.ts';
-import { deratedA, supplyFigures, type SupplyLoad } from './hardware/supply-load.ts';
+import { deratedA, supplyFigures, supplyLoad } from './hardware/supply-load.ts';
 import { type LaneVoltages, laneVoltages } from './wiring/lane-voltages.ts';
 import { instantTripA, smallestShortCircuit } from './wiring/protection.ts';
 import { limitOfCircuit, type SolvedSupply, solveSupply } from './wiring/supply-network.ts';
@@ -23,7 +23,8 @@ export function solveElectrics(index: DesignIndex): Electrics {
       lanes.forEach((lane, i) => voltages.set(solution.network.ids[i], lane));
     }
   }
-  const hardware = hardwareLoads(index, (id) => channelLoad(index, id, voltages.get(id)?.runA ?? null)?.amps ?? null, limitOf);
+  const channelA = (of: 'runA' | 'allOnRunA') => (id: string) => channelLoad(index, id, voltages.get(id)?.[of] ?? null)?.amps ?? null;
+  const hardware = hardwareLoads(index, channelA('runA'), channelA('allOnRunA'), limitOf);
   const circuits = new Map<string, CircuitContext>();
   const supplies = new Map<string, SupplyFigures>();
   const rated = ratedByCircuit(hardware);
@@ -45,21 +46,10 @@ function solveOne(
   solved.circuits.forEach((solution, at) => {
     const { circuit } = solution.network;
     const short = smallestShortCircuit(index, solution.network, solved.lowestV, supply.internalOhm, type);
-    const largest = largestPassingK({ solved, at, rated: rated.get(circuit.id) ?? [], supplyLoad: load, supplyMayA, limitOf });
+    const largest = largestPassingK({ solved, at, rated, supplyMayA, limitOf });
     const figures = circuitFigures(solution, lanesOf.get(circuit.id) ?? [], short, instantTripA(circuit, breakerDcFactor), largest);
     circuits.set(circuit.id, { index, circuit, solution, figures, short });
   });
-}
-
-function supplyLoad({ supply, circuits }: SolvedSupply): SupplyLoad {
-  let standing = supply.otherLoadA;
-  let largestA = 0;
-  for (const solution of circuits) {
-    const { alwaysReturn, addedReturn } = solution.worst.currents;
-    standing += standingA(solution);
-    for (let i = 0; i < alwaysReturn.length; i++) largestA = Math.max(largestA, alwaysReturn[i] + addedReturn[i]);
-  }
-  return { standingA: standing, sum: sumLoads(circuits.flatMap(circuitLoads)), largestA };
 }
 
 /** Groups and modules that limit something, by the circuits whose lanes load them. */

@@ -4,7 +4,7 @@ export type * from './assessment.ts';
 export { assess } from './assess.ts';
 export { FINDING_CODES, type FindingCode } from './finding-codes.ts';
 export * from './points/index.ts';
-export { groupIndexOf, groupKey } from './design-index.ts';
+export { groupIndexOf, groupKey, wiringBy } from './design-index.ts';
 export { channelOfAddress, directAddress, parseAddress, type DirectAddress } from './hardware/address.ts';
 export { autoAssign, type AutoAssignment, type Proposed, type Unplaced } from './mapping/auto-assign.ts';
 export { ohmPerMetre, STANDARD_SECTIONS_MM2 } from './wiring/conductor.ts';

@@ -46,7 +46,7 @@ function laneFigures(
     outputAddress: addressOf(index, control),
     statusAddress: addressOf(index, index.status.get(dispenser.id)),
     outputGroup: outputGroupOf(index, control),
-    channelA: channelLoad(index, dispenser.id, voltages?.runA ?? null)?.amps ?? null,
+    channelA: voltages?.noWorkingPoint === 'worst' ? null : (channelLoad(index, dispenser.id, voltages?.runA ?? null)?.amps ?? null),
     runLengthM: runLengthM(dispenser, solution),
     worst: voltages?.worst ?? null,
     allOn: voltages?.allOn ?? null,

@@ -56,5 +56,5 @@ async function policiesOf(tx: Tx, projectId: string): Promise<Partial<typeof pro
   const source = await findProject(tx, projectId);
   if (!source) throw new NotFound('project to copy from');
   const { id: _id, version: _version, name: _name, description: _description, ...policies } = source;
-  return policies as Partial<typeof projects.$inferInsert>;
+  return policies;
 }

@@ -22,4 +22,13 @@ describe('protection levels in zones (IEC 60079-14)', () => {
     expect(codes(null, [])).toEqual(['AR-03 note']);
     expect(codes('22', ['Dc'])).toEqual([]);
   });
+
+  it('note a type without a stated surface temperature, in a classified place only', () => {
+    const codes = (zone: Zone, maxSurfaceC: number | null) =>
+      assess(buildDesign({ lanes: [buildLane('P-01', {}, { zone })], dispenserTypes: [buildFourCoreType({ maxSurfaceC })] }))
+        .findings.filter((f) => f.code.startsWith('AR')).map((f) => `${f.code} ${f.severity}`);
+    expect(codes('22', null)).toEqual(['AR-04 note']);
+    expect(codes('22', 85)).toEqual([]);
+    expect(codes('none', null)).toEqual([]);
+  });
 });

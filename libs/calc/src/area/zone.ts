@@ -40,8 +40,20 @@ export function zoneFinding(point: Point, dispenserId: string, type: DispenserTy
       ? `Zone ${zone} asks for ${wanted}, the type has ${type.protectionLevels.join(', ')}`
       : `Zone ${zone} asks for ${wanted}, the type states no protection level`,
     detail: 'A screening aid. The plant’s responsible person decides.',
-    remedy: known ? `Choose a type with level ${wanted}, or move the device out of the zone` : 'Enter the protection level from the type’s certificate',
+    remedy: known ? `Choose a type with level ${wanted}, or move the device out of the zone.` : 'Enter the protection level from the type’s certificate.',
     dispenserIds: [dispenserId],
+  });
+}
+
+/** Notes a type whose surface temperature nobody can compare with the area's gas or dust; the comparison itself is not made. */
+export function surfaceFinding(point: Point, dispenserId: string, type: DispenserType | null): Finding | null {
+  if (point.zone === null || point.zone === 'none' || !type || type.maxSurfaceC !== null) return null;
+  return makeFinding('AR-04', 'point', point.id, point.tag, {
+    title: `Zone ${point.zone}, and the type states no surface temperature`,
+    detail: 'It cannot be compared with the ignition temperature of the gas or dust.',
+    remedy: 'Enter the highest surface temperature from the type’s certificate.',
+    dispenserIds: [dispenserId],
+    mark: dispenserId,
   });
 }
 
@@ -55,7 +67,7 @@ export function unstatedZones(index: DesignIndex): Finding[] {
     makeFinding('AR-03', 'project', project.id, project.name, {
       title: `${blank.length} ${blank.length === 1 ? 'point has' : 'points have'} no zone stated`,
       detail: 'Whether the types suit the area is not checked there.',
-      remedy: 'State the zone of each point, or “none”',
+      remedy: 'State the zone of each point, or “none”.',
       compared: [{ name: 'points without zone', value: blank.length, limit: 0, unit: '' }],
       dispenserIds,
     }),

@@ -1,5 +1,6 @@
 import type { Explanation } from '../assessment.ts';
 import { formatAmps, formatVolts, voltsAgainstMinimum } from '../format.ts';
+import { pulsePolarity } from '../wiring/signals.ts';
 import { input, step, typeSource, type LaneContext } from './lane-context.ts';
 
 export type LevelFigureName = 'pulseLevel' | 'statusLevel';
@@ -16,7 +17,7 @@ function pulseLevel({ figures: { pulseLevelV }, type, outputType }: LaneContext)
   const result = voltsAgainstMinimum(pulseLevelV);
   return {
     title: `Why ${result} at the pulse input`,
-    formula: `level = lowest supply − drop in the output − I × R(pulse core) − ${type.controlPolarity === 'sourcing' ? 'rise of the dispenser’s own 0 V' : 'drop on its own +24 V conductor'}`,
+    formula: `level = lowest supply − drop in the output − I × R(pulse core) − ${pulsePolarity(type, outputType) === 'sourcing' ? 'rise of the dispenser’s own 0 V' : 'drop on its own +24 V conductor'}`,
     substituted: result,
     inputs: [
       ...(outputType ? [input('drop in the output', formatVolts(outputType.dropV), typeSource(outputType))] : []),

@@ -1,4 +1,5 @@
 import type { Explanation } from '../assessment.ts';
+import { wiringBy } from '../design-index.ts';
 import { ampsAgainstMaximum, ampsAgainstMinimum, formatAmps, formatPercent } from '../format.ts';
 import { FROM_POLICY, input, step, tagsOf, typeSource, type Input, type LaneContext } from './lane-context.ts';
 
@@ -6,8 +7,9 @@ export type LoadFigureName = 'channelLoad' | 'groupLoad' | 'supplyLoad';
 
 const UP = 'toward the rating that it is compared with';
 
-/** A load that the lane is part of; null while it is unmapped or cannot be computed. */
+/** A load that the lane is part of; null while it is unmapped or cannot be computed, as in a collapse. */
 export function explainLoad(ctx: LaneContext, figure: LoadFigureName): Explanation | null {
+  if (ctx.figures.collapsed) return null;
   switch (figure) {
     case 'channelLoad':
       return channelLoad(ctx);
@@ -18,9 +20,9 @@ export function explainLoad(ctx: LaneContext, figure: LoadFigureName): Explanati
   }
 }
 
-function channelLoad({ figures: { channelA }, type, outputType }: LaneContext): Explanation | null {
+function channelLoad({ figures: { channelA }, dispenser, type, outputType }: LaneContext): Explanation | null {
   if (channelA === null || !type) return null;
-  const twoCore = type.wiring === 'two-core';
+  const twoCore = wiringBy(dispenser, type) === 'two-core';
   const result = ampsAgainstMaximum(channelA);
   return {
     title: `Why ${result} on the channel`,
@@ -74,7 +76,7 @@ function supplyLoad(ctx: LaneContext): Explanation | null {
       limitInput(ctx),
       input('all on', formatAmps(load.allOnA), 'the limit is kept by software only'),
       input('margin', formatPercent(project.supplyMarginPercent), FROM_POLICY),
-      input('rating in this cabinet', ampsAgainstMinimum(load.ratingA), 'type data, derated to the cabinet’s temperature'),
+      input('rating in this cabinet', ampsAgainstMinimum(load.ratingA), `type data, derated to the cabinet’s temperature${supply.redundant ? '; one of the redundant pair must carry all, both must be equal' : ''}`),
     ],
     rounding: [step('up', result, UP)],
     result,

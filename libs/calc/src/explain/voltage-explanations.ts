@@ -1,4 +1,5 @@
 import type { Explanation, VoltageFigure } from '../assessment.ts';
+import { wiringBy } from '../design-index.ts';
 import { formatMetres, formatVolts, voltsAgainstMinimum, formatNumber, withUnit } from '../format.ts';
 import { FROM_POLICY, input, step, tagsOf, typeSource, type Input, type LaneContext } from './lane-context.ts';
 
@@ -78,8 +79,8 @@ function fineVolts(volts: number): string {
   return withUnit(formatNumber(volts, 2), 'V');
 }
 
-function outputTerm({ type }: LaneContext): string {
-  return type?.wiring === 'two-core' ? ' − drop in the output' : '';
+function outputTerm({ dispenser, type }: LaneContext): string {
+  return wiringBy(dispenser, type) === 'two-core' ? ' − drop in the output' : '';
 }
 
 function limitText(limit: number | null | undefined): string {

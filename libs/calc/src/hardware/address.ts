@@ -67,7 +67,7 @@ function overlap(index: DesignIndex, first: Module, second: Module): Finding {
   return makeFinding('IO-07', 'module', second.id, `${controller} ${second.name}`.trim(), {
     title: `${second.name} begins at byte ${second.baseByte}, ${first.name} reaches to byte ${free - 1}`,
     detail: 'Two channels would have the same direct address.',
-    remedy: `Set the base byte of ${second.name} to ${free} or higher`,
+    remedy: `Set the base byte of ${second.name} to ${free} or higher.`,
     compared: [{ name: 'base byte', value: second.baseByte, limit: free, unit: '' }],
     mark: first.id,
   });

@@ -1,17 +1,31 @@
 import type { CircuitFigures } from '../assessment.ts';
-import { total } from '../wiring/currents.ts';
+import { type Currents, total } from '../wiring/currents.ts';
 import type { CircuitSolution, LaneVoltages } from '../wiring/lane-voltages.ts';
+import type { CircuitNetwork } from '../wiring/network.ts';
 import type { ShortCircuit } from '../wiring/protection.ts';
-import { type Load, NO_LIMIT, sumLoads, worstSetOf, worstSum } from './load-sum.ts';
+import { type Load, sumLoads, worstSetOf, worstSum } from './load-sum.ts';
 
-/** Run increments of a circuit's lanes, for sums under limits. */
-export function circuitLoads({ network, worst }: CircuitSolution): Load[] {
-  return network.ids.map((id, i) => ({ id, circuitId: network.circuit.id, amps: worst.currents.addedReturn[i] }));
+/** Run increments of a circuit's lanes through protection and supply, for sums under limits. */
+export function circuitLoads({ ids, circuit }: CircuitNetwork, currents: Currents): Load[] {
+  return ids.map((id, i) => ({ id, circuitId: circuit.id, amps: currents.addedSupply[i] }));
 }
 
 /** What always flows in a circuit: idling lanes and all on their own clock, A. */
-export function standingA({ worst }: CircuitSolution): number {
-  return total(worst.currents.alwaysReturn);
+export function standingA(currents: Currents): number {
+  return total(currents.alwaysReturn);
+}
+
+/**
+ * Current of a circuit with all on, A, at the voltages that all on leave. Where they leave none it is
+ * the largest that is known: the true one is larger.
+ */
+export function allOnA({ allOn, worst }: CircuitSolution): number {
+  const all = everyLaneA(allOn.currents);
+  return allOn.collapsed ? Math.max(all, everyLaneA(worst.currents)) : all;
+}
+
+function everyLaneA(currents: Currents): number {
+  return currents.addedSupply.reduce((sum, amps) => sum + Math.max(0, amps), standingA(currents));
 }
 
 /** Figures of one circuit; `largestPassingK` is worked out once everything else is known. */
@@ -20,8 +34,8 @@ export function circuitFigures(
 ): CircuitFigures {
   const { network, limit } = solution;
   const limitOf = () => limit;
-  const sum = sumLoads(circuitLoads(solution));
-  const standing = standingA(solution);
+  const sum = sumLoads(circuitLoads(network, solution.worst.currents));
+  const standing = standingA(solution.worst.currents);
   let lowest = -1;
   lanes.forEach((lane, i) => {
     if (lane.worst && (lowest < 0 || lane.worst.volts < lanes[lowest].worst!.volts)) lowest = i;
@@ -31,7 +45,7 @@ export function circuitFigures(
     concurrencyLimit: network.circuit.concurrencyLimit,
     standingA: standing,
     worstA: standing + worstSum(sum, limitOf),
-    allOnA: standing + worstSum(sum, NO_LIMIT),
+    allOnA: allOnA(solution),
     ratingA: network.circuit.protectionA,
     worstSet: worstSetOf(sum, limitOf),
     lowestV: lowest < 0 ? null : lanes[lowest].worst!.volts,

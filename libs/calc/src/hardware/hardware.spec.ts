@@ -39,7 +39,7 @@ describe('direct addresses', () => {
     const second = buildModule({ id: 'DO2', name: 'DO2', slot: 2 });
     const inputs = buildModule({ id: 'DI1', name: 'DI1', typeId: 'in-16', baseByte: 4, slot: 3 });
     const overlap = (baseByte: number) => group({ modules: [buildModule(), { ...second, baseByte }, inputs] }).find('IO-07');
-    expect(overlap(5)).toMatchObject({ subject: { label: 'PLC1 DO2' }, remedy: 'Set the base byte of DO2 to 6 or higher' });
+    expect(overlap(5)).toMatchObject({ subject: { label: 'PLC1 DO2' }, remedy: 'Set the base byte of DO2 to 6 or higher.' });
     expect(overlap(6)).toBeUndefined();
   });
 });
@@ -56,7 +56,7 @@ describe('loads of groups and modules', () => {
   it('say what is over, rounded up, and which k would do', () => {
     const { find } = group({ lanes: twoCore(6), assignments: onFirst(6), moduleTypes: [buildOutputType({ groupA: 1.5 })] });
     expect(find('IO-03')).toMatchObject({
-      severity: 'error', title: '1.68\u2009A in the group, rating 1.50\u2009A', remedy: 'Set k to 5 on C1, or spread the dispensers over two groups',
+      severity: 'error', title: '1.68\u2009A in the group, rating 1.50\u2009A', remedy: 'Set k to 5 on C1, or spread the dispensers over two groups.',
       subject: { id: 'DO1/0', label: 'PLC1 DO1, channels 0–7' },
     });
   });
@@ -120,5 +120,16 @@ describe('supplies', () => {
   it('are found over their rating', () => {
     const { find } = group({ lanes: twoCore(3), supplyTypes: [buildSupplyType({ ratedA: 1 })] });
     expect(find('SU-01')).toMatchObject({ severity: 'error', title: '1.05\u2009A asked of the supply, rating 1.00\u2009A at 40 °C' });
+  });
+});
+
+describe('a redundant pair of supplies', () => {
+  it('counts one rating and says so', () => {
+    const over = { lanes: twoCore(3), supplyTypes: [buildSupplyType({ ratedA: 1 })] };
+    const single = group(over).find('SU-01')!;
+    const pair = group({ ...over, supplies: [buildSupply({ redundant: true })] }).find('SU-01')!;
+    expect(pair.title).toBe(single.title);
+    expect(pair.detail).toContain('One of the redundant pair must carry all, so one rating counts; both must be equal.');
+    expect(single.detail).not.toContain('pair');
   });
 });

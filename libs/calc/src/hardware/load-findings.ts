@@ -6,7 +6,7 @@ import { type FindingCode, makeFinding } from '../finding-codes.ts';
 import type { Finding, SubjectKind } from '../findings.ts';
 import { ampsAgainstMaximum, formatAmps, formatCount } from '../format.ts';
 import { relayOperations } from '../wiring/signals.ts';
-import { channelLoad } from './loads.ts';
+import { channelLoad, leastChannelA } from './loads.ts';
 
 const TOLERANCE_A = 1e-9;
 
@@ -60,7 +60,7 @@ function pushLoad(findings: Finding[], electrics: Electrics, figures: LoadFigure
       detail: over
         ? `Worst set under the limits: ${formatCount(figures.worstSet.length)} dispensers. With all on: ${ampsAgainstMaximum(allOnA)}.`
         : `Under the limits it is ${ampsAgainstMaximum(worstA)}. The program alone keeps them: forcing or an online change bypasses it, and then only the output’s own protection holds.`,
-      remedy: over ? loadRemedy(electrics, figures, place) : 'Spread the dispensers so that all may run, or keep forcing under control',
+      remedy: over ? loadRemedy(electrics, figures, place) : 'Spread the dispensers so that all may run, or keep forcing under control.',
       compared: [{ name: `load of the ${place.word}`, value: amps, limit: ratingA, unit: 'A' }],
       dispenserIds: over ? figures.worstSet : [],
     }),
@@ -74,8 +74,8 @@ function loadRemedy({ index, circuits, limitOf }: Electrics, { worstSet, ratingA
   const [circuitId] = circuitIds;
   const circuit = circuitIds.size === 1 && circuitId !== null ? index.circuits.get(circuitId) : undefined;
   const largest = circuit && circuits.get(circuit.id)?.figures.largestPassingK;
-  if (circuit && largest && largest < limitOf(circuit.id)) return `Set k to ${largest} on ${circuit.name}, or ${spread}`;
-  return worstA > (ratingA ?? 0) && worstSet.length > 1 ? capitalised(spread) : `Choose a ${word} with a higher rating`;
+  if (circuit && largest && largest < limitOf(circuit.id)) return `Set k to ${largest} on ${circuit.name}, or ${spread}.`;
+  return worstA > (ratingA ?? 0) && worstSet.length > 1 ? `${capitalised(spread)}.` : `Choose a ${word} with a higher rating.`;
 }
 
 function capitalised(text: string): string {
@@ -96,25 +96,25 @@ export function channelFindings(lane: LaneContext): Finding[] {
   const findings: Finding[] = [];
   if (type.channelA !== null && load.amps > type.channelA + TOLERANCE_A) {
     findings.push(about('IO-01', 'channel load', load.amps, type.channelA, 'A',
-      `${ampsAgainstMaximum(load.amps)} on the channel, rating ${formatAmps(type.channelA)}`, 'Map it to a module with a higher channel rating'));
+      `${ampsAgainstMaximum(load.amps)} on the channel, rating ${formatAmps(type.channelA)}`, 'Map it to a module with a higher channel rating.'));
   }
   if (type.channelPeakA !== null && load.peakA !== null && load.peakA > type.channelPeakA + TOLERANCE_A) {
     findings.push(about('IO-02', 'starting peak', load.peakA, type.channelPeakA, 'A',
       `${ampsAgainstMaximum(load.peakA)} when the motor starts, the channel stands ${formatAmps(type.channelPeakA)}`,
-      'Map it to a module that stands the peak, or choose a four-core type'));
+      'Map it to a module that stands the peak, or choose a four-core type.'));
   }
-  return type.technology === 'relay' ? [...findings, ...relayFindings(lane, type, load.amps, about)] : findings;
+  return type.technology === 'relay' ? [...findings, ...relayFindings(lane, type, leastChannelA(index, dispenser.id, load.amps), about)] : findings;
 }
 
 function relayFindings(
-  { index, figures, dispenser }: LaneContext, type: ModuleType, amps: number,
+  { index, figures, dispenser }: LaneContext, type: ModuleType, leastA: number,
   about: (code: FindingCode, name: string, value: number, limit: number, unit: string, title: string, remedy: string, detail?: string) => Finding,
 ): Finding[] {
   const findings: Finding[] = [];
-  if (type.minLoadA !== null && amps < type.minLoadA - TOLERANCE_A) {
-    findings.push(about('SG-08', 'channel load', amps, type.minLoadA, 'A',
-      `${formatAmps(amps, 'down')} on the relay contact, least load ${formatAmps(type.minLoadA)}`,
-      'Map it to a transistor output', 'Below its least load a contact may fail to close for good.'));
+  if (type.minLoadA !== null && leastA < type.minLoadA - TOLERANCE_A) {
+    findings.push(about('SG-08', 'channel load', leastA, type.minLoadA, 'A',
+      `${formatAmps(leastA, 'down')} on the relay contact, least load ${formatAmps(type.minLoadA)}`,
+      'Map it to a transistor output.', 'Below its least load a contact may fail to close for good.'));
   }
   const years = index.design.project.relayLifeYears;
   const pulses = dispenser.method === 'pulse' ? figures.plan?.pulsesPerYear : undefined;
@@ -123,7 +123,7 @@ function relayFindings(
     if (operations > type.ratedOperations) {
       findings.push(about('SG-09', 'operations', operations, type.ratedOperations, '',
         `${formatCount(Math.ceil(operations))} operations in ${years} years, rated ${formatCount(type.ratedOperations)}`,
-        'Map it to a transistor output, or choose a larger dose', `${formatCount(Math.ceil(pulses))} pulses a year.`));
+        'Map it to a transistor output, or choose a larger dose.', `${formatCount(Math.ceil(pulses))} pulses a year.`));
     }
   }
   return findings;

@@ -54,6 +54,3 @@ export function worstSetOf({ byCircuit }: LoadSum, limitOf: LimitOf): string[] {
   }
   return set;
 }
-
-/** Without any limit. */
-export const NO_LIMIT: LimitOf = () => Infinity;

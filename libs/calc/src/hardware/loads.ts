@@ -1,7 +1,9 @@
 import type { LoadFigures, ModuleFigures } from '../assessment.ts';
 import type { Assignment, Module, ModuleType } from '../design.ts';
 import { type DesignIndex, groupIndexOf, groupKey, grouped, typeOf, wiringOf } from '../design-index.ts';
-import { type LimitOf, type LoadSum, NO_LIMIT, sumLoads, worstSetOf, worstSum } from './load-sum.ts';
+import { NOMINAL_V } from '../wiring/network.ts';
+import { type LimitOf, type Load, type LoadSum, sumLoads, worstSetOf, worstSum } from './load-sum.ts';
+import { HIGHEST_UNSTATED_V, highestSupplyV } from './supply-load.ts';
 
 /** What an output channel carries, A. */
 export interface ChannelLoad {
@@ -18,7 +20,11 @@ export interface HardwareLoads {
   readonly rated: readonly RatedSum[];
 }
 
+type AmpsOf = (dispenserId: string) => number | null;
+
+/** A group or module with its loads and what it may carry, A. */
 export interface RatedSum {
+  readonly loads: readonly Load[];
   readonly sum: LoadSum;
   readonly ratingA: number;
 }
@@ -41,10 +47,27 @@ export function channelLoad(index: DesignIndex, dispenserId: string, runA: numbe
 }
 
 /**
+ * Smallest current on the output channel while it is on, A: with constant power through the motor that at
+ * the supply's highest voltage and no drop, else the one current there is.
+ */
+export function leastChannelA(index: DesignIndex, dispenserId: string, amps: number): number {
+  const dispenser = index.dispensers.get(dispenserId);
+  const type = dispenser && typeOf(index, dispenser);
+  if (!type || type.load !== 'constant-power' || wiringOf(index, dispenser) !== 'two-core') return amps;
+  const circuit = dispenser.circuitId === null ? undefined : index.circuits.get(dispenser.circuitId);
+  const supply = circuit && index.supplies.get(circuit.supplyId);
+  const highest = supply ? highestSupplyV(supply, index.supplyTypes.get(supply.typeId)) : HIGHEST_UNSTATED_V;
+  return Math.min(amps, (type.runA * NOMINAL_V) / highest);
+}
+
+/**
  * Loads of every group and module: the worst case under the limits is, for each circuit, the k largest
  * channel loads in that group. Inputs carry none; their channels are counted all the same.
+ *
+ * @param ampsOf load of a dispenser's channel under the limits, A
+ * @param allOnOf the same with all on
  */
-export function hardwareLoads(index: DesignIndex, ampsOf: (dispenserId: string) => number | null, limitOf: LimitOf): HardwareLoads {
+export function hardwareLoads(index: DesignIndex, ampsOf: AmpsOf, allOnOf: AmpsOf, limitOf: LimitOf): HardwareLoads {
   const groups = new Map<string, LoadFigures>();
   const modules = new Map<string, ModuleFigures>();
   const rated: RatedSum[] = [];
@@ -53,9 +76,12 @@ export function hardwareLoads(index: DesignIndex, ampsOf: (dispenserId: string) 
     if (!type) continue;
     const onModule = index.assignmentsByModule.get(module.id) ?? [];
     const place = (assignments: readonly Assignment[], ratingA: number | null, channels: number): LoadFigures => {
-      const sum = sumOf(index, assignments, type, ampsOf);
-      if (ratingA !== null && sum.byCircuit.size > 0) rated.push({ sum, ratingA });
-      return figuresOf(sum, ratingA, usedChannels(assignments), channels, limitOf);
+      const loads = loadsOf(index, assignments, type, ampsOf);
+      const sum = sumLoads(loads);
+      if (ratingA !== null && loads.length > 0) rated.push({ loads, sum, ratingA });
+      const allOnA = loadsOf(index, assignments, type, allOnOf).reduce((all, { amps }) => all + Math.max(0, amps), 0);
+      const used = new Set(assignments.map((a) => a.channel)).size;
+      return { worstA: worstSum(sum, limitOf), allOnA, ratingA, worstSet: worstSetOf(sum, limitOf), used, channels };
     };
     groupFigures(module, type, onModule, place, groups);
     const whole = place(onModule, type.moduleA, type.channels);
@@ -76,29 +102,13 @@ function groupFigures(
   }
 }
 
-function sumOf(index: DesignIndex, assignments: readonly Assignment[], type: ModuleType, ampsOf: (id: string) => number | null): LoadSum {
-  const loads = [];
-  if (type.kind === 'output') {
-    for (const { dispenserId, purpose } of assignments) {
-      const amps = purpose === 'control' ? ampsOf(dispenserId) : null;
-      const circuitId = index.dispensers.get(dispenserId)?.circuitId ?? null;
-      if (amps !== null) loads.push({ id: dispenserId, circuitId, amps });
-    }
+function loadsOf(index: DesignIndex, assignments: readonly Assignment[], type: ModuleType, ampsOf: AmpsOf): Load[] {
+  const loads: Load[] = [];
+  if (type.kind !== 'output') return loads;
+  for (const { dispenserId, purpose } of assignments) {
+    const amps = purpose === 'control' ? ampsOf(dispenserId) : null;
+    const circuitId = index.dispensers.get(dispenserId)?.circuitId ?? null;
+    if (amps !== null) loads.push({ id: dispenserId, circuitId, amps });
   }
-  return sumLoads(loads);
-}
-
-function figuresOf(sum: LoadSum, ratingA: number | null, used: number, channels: number, limitOf: LimitOf): LoadFigures {
-  return {
-    worstA: worstSum(sum, limitOf),
-    allOnA: worstSum(sum, NO_LIMIT),
-    ratingA,
-    worstSet: worstSetOf(sum, limitOf),
-    used,
-    channels,
-  };
-}
-
-function usedChannels(assignments: readonly Assignment[]): number {
-  return new Set(assignments.map((a) => a.channel)).size;
+  return loads;
 }

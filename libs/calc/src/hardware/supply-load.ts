@@ -1,6 +1,8 @@
 import type { SupplyFigures } from '../assessment.ts';
 import type { Supply, SupplyType } from '../design.ts';
-import { type LimitOf, type LoadSum, NO_LIMIT, worstSum } from './load-sum.ts';
+import type { SolvedSupply } from '../wiring/supply-network.ts';
+import { allOnA, circuitLoads, standingA } from './circuit-load.ts';
+import { type LimitOf, type LoadSum, sumLoads, worstSum } from './load-sum.ts';
 
 /** Lowest voltage that counts where a supply states no tolerance, V: 24 V − 15 % (IEC 61131-2). */
 export const LOWEST_UNSTATED_V = 20.4;
@@ -9,6 +11,15 @@ export const LOWEST_UNSTATED_V = 20.4;
 export function lowestSupplyV(supply: Supply, type: SupplyType | undefined): number {
   const tolerance = type?.tolerancePercent ?? null;
   return tolerance === null ? Math.min(supply.setV, LOWEST_UNSTATED_V) : supply.setV * (1 - tolerance / 100);
+}
+
+/** Highest voltage that counts where a supply states no tolerance, V: 24 V + 20 % (IEC 61131-2). */
+export const HIGHEST_UNSTATED_V = 28.8;
+
+/** Highest voltage of a supply, V: setpoint × (1 + tolerance), or 28.8 V where none is stated. */
+export function highestSupplyV(supply: Supply, type: SupplyType | undefined): number {
+  const tolerance = type?.tolerancePercent ?? null;
+  return tolerance === null ? Math.max(supply.setV, HIGHEST_UNSTATED_V) : supply.setV * (1 + tolerance / 100);
 }
 
 /**
@@ -27,6 +38,25 @@ export interface SupplyLoad {
   readonly sum: LoadSum;
   /** Largest current of one dispenser on it, A; 0: none. */
   readonly largestA: number;
+  /** With all on, A. */
+  readonly allOnA: number;
+  /** A circuit on it has no working point: the currents are too low. */
+  readonly collapsed: boolean;
+}
+
+/** Gathers the load of a supply from its solved circuits. */
+export function supplyLoad({ supply, circuits }: SolvedSupply): SupplyLoad {
+  let largestA = 0;
+  for (const { worst: { currents: { alwaysReturn, addedSupply } } } of circuits) {
+    for (let i = 0; i < alwaysReturn.length; i++) largestA = Math.max(largestA, alwaysReturn[i] + addedSupply[i]);
+  }
+  return {
+    standingA: circuits.reduce((sum, { worst }) => sum + standingA(worst.currents), supply.otherLoadA),
+    sum: sumLoads(circuits.flatMap(({ network, worst }) => circuitLoads(network, worst.currents))),
+    largestA,
+    allOnA: circuits.reduce((sum, solution) => sum + allOnA(solution), supply.otherLoadA),
+    collapsed: circuits.some(({ worst }) => worst.collapsed),
+  };
 }
 
 /**
@@ -41,11 +71,11 @@ export function supplyFigures(load: SupplyLoad, ratingA: number, lowestV: number
   return {
     standingA: load.standingA,
     worstA,
-    allOnA: load.standingA + worstSum(load.sum, NO_LIMIT),
+    allOnA: load.allOnA,
     demandA,
     ratingA,
     headroomA,
-    headroomDispensers: oneMoreA > 0 ? Math.max(0, Math.floor(headroomA / oneMoreA + 1e-9)) : null,
+    headroomDispensers: oneMoreA > 0 && !load.collapsed ? Math.max(0, Math.floor(headroomA / oneMoreA + 1e-9)) : null,
     lowestV,
   };
 }

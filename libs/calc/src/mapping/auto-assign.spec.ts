@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import type { Design } from '../design.ts';
 import {
-  buildAssignment, buildCircuit, buildDesign, buildGroup, buildInputType, buildLane, buildModule, buildNode, buildOutputType, buildProject, buildTwoCoreType,
+  buildAssignment, buildCircuit, buildDesign, buildFourCoreType, buildGroup, buildInputType, buildLane, buildModule, buildNode, buildOutputType, buildProject, buildTwoCoreType,
   type DesignParts,
 } from '#support/design-builder.ts';
 import { largeDesign } from '#support/large-design.ts';
@@ -109,12 +109,26 @@ describe('autoAssign', () => {
   it.each([
     { reason: 'no module of this kind', parts: { modules: [] } },
     { reason: 'polarity', parts: { moduleTypes: [buildOutputType({ polarity: 'sinking' })] } },
+    { reason: 'leak more', parts: { moduleTypes: [buildOutputType({ leakageA: 0.002 })] } },
     { reason: 'rated for its load', parts: { moduleTypes: [buildOutputType({ channelA: 0.1 })] } },
     { reason: 'fed by other circuits', parts: { circuits: [buildCircuit(), buildCircuit({ id: 'x' })], moduleGroups: [buildGroup('DO1', 0, 'x'), buildGroup('DO1', 1, 'x')] } },
     { reason: 'type or wiring', parts: { dispenserTypes: [] } },
   ])('says why: $reason', ({ reason, parts }) => {
     const { unplaced } = autoAssign(cabinet({ lanes: [twoCore('P-1')], dispenserTypes: [buildTwoCoreType()], ...parts }));
     expect(unplaced[0].reason).toContain(reason);
+  });
+
+  it('takes no input that asks for more than the status output delivers, its type’s least current counted (SG-07)', () => {
+    const input = buildInputType({ inputType: 2, inputA: 0.002 });
+    const type = buildFourCoreType({ status: { polarity: 'sourcing', maxA: 0.004, dropV: 1, leakageA: 0 } });
+    const { unplaced } = autoAssign(cabinet({ lanes: [buildLane('P-1')], dispenserTypes: [type], moduleTypes: [buildOutputType(), input] }));
+    expect(unplaced).toMatchObject([{ purpose: 'status', reason: expect.stringContaining('more current than its status output') as string }]);
+  });
+
+  it('takes no relay whose least load the smallest current of a constant-power load misses', () => {
+    const relay = buildOutputType({ technology: 'relay', minLoadA: 0.28, ratedOperations: 100_000 });
+    const type = buildTwoCoreType({ load: 'constant-power' });
+    expect(autoAssign(cabinet({ lanes: [twoCore('P-1')], dispenserTypes: [type], moduleTypes: [relay] })).proposed).toEqual([]);
   });
 
   it('places a thousand lanes so that no mapping or load finding is left, each time alike', () => {

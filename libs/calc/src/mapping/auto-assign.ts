@@ -2,9 +2,9 @@ import type { Design, Dispenser, Purpose } from '../design.ts';
 import { type DesignIndex, indexDesign, typeOf, wiringOf } from '../design-index.ts';
 import { type LimitOf, sumLoads, worstSum } from '../hardware/load-sum.ts';
 import { limitOfCircuit } from '../wiring/supply-network.ts';
-import { outputFits, statusFitsInput } from '../wiring/signals.ts';
+import { neededInputA, outputFits, statusFitsInput } from '../wiring/signals.ts';
 import { wantsControl, wantsStatus } from './mapping-findings.ts';
-import { type GroupSlots, type ModuleSlots, moduleSlots, occupy, plannedLoad } from './slots.ts';
+import { type GroupSlots, type ModuleSlots, moduleSlots, occupy, type PlannedLoad, plannedLoad } from './slots.ts';
 import { channelCounts, type Kind } from './spare.ts';
 
 export interface Proposed {
@@ -76,15 +76,15 @@ function lacks(index: DesignIndex, dispenser: Dispenser, purpose: Purpose): bool
 const REASONS = [
   'Its controller has no module of this kind: add one',
   'No module there has the polarity that the device wants: add one that has',
+  'The outputs there that fit leak more than the device takes as off: add a module with less leakage',
   'No channel there is rated for its load: add a module with a higher rating',
+  'The inputs there take more current than its status output delivers: add a module that takes less',
   'The groups there are fed by other circuits: feed one from its circuit',
   'No channel is free: add a module',
   'The group or module would be over its rating: set a smaller k, or add a module',
   'Only spare channels are left: add a module, or lower the spare policy',
 ] as const;
-const [NO_MODULE, POLARITY, CHANNEL_RATING, FEED, NO_FREE, RATING, SPARE] = REASONS.keys();
-
-type PlannedLoad = ReturnType<typeof plannedLoad>;
+const [NO_MODULE, POLARITY, LEAKAGE, CHANNEL_RATING, INPUT_CURRENT, FEED, NO_FREE, RATING, SPARE] = REASONS.keys();
 
 interface Candidate {
   readonly slots: ModuleSlots;
@@ -138,7 +138,7 @@ function reaches(index: DesignIndex, dispenser: Dispenser, slots: ModuleSlots, p
 }
 
 /** The first thing that keeps a dispenser off a group; null: nothing. */
-function obstacle(plan: Plan, dispenser: Dispenser, load: PlannedLoad, purpose: Purpose, slots: ModuleSlots, group: GroupSlots): number | null {
+function obstacle(plan: Plan, dispenser: Dispenser, load: PlannedLoad | null, purpose: Purpose, slots: ModuleSlots, group: GroupSlots): number | null {
   const allowed = (plan.allowance.get(`${slots.type.kind}/${slots.cabinetId}`) ?? 0) > 0;
   return (
     (purpose === 'control' ? outputObstacle(plan, dispenser, load, slots, group) : inputObstacle(plan.index, dispenser, slots, group)) ??
@@ -146,9 +146,10 @@ function obstacle(plan: Plan, dispenser: Dispenser, load: PlannedLoad, purpose: 
   );
 }
 
-function outputObstacle({ index, limitOf }: Plan, dispenser: Dispenser, load: PlannedLoad, { type, loads }: ModuleSlots, group: GroupSlots): number | null {
+function outputObstacle({ index, limitOf }: Plan, dispenser: Dispenser, load: PlannedLoad | null, { type, loads }: ModuleSlots, group: GroupSlots): number | null {
   const device = typeOf(index, dispenser)!;
-  if (!outputFits(type, device.controlPolarity) || type.leakageA > device.offStateA) return POLARITY;
+  if (!outputFits(type, device.controlPolarity)) return POLARITY;
+  if (type.leakageA > device.offStateA + 1e-12) return LEAKAGE;
   if (load && !channelStands(type, load)) return CHANNEL_RATING;
   const foreign = group.circuitId !== null && dispenser.circuitId !== null && group.circuitId !== dispenser.circuitId;
   if (foreign) return FEED;
@@ -158,16 +159,16 @@ function outputObstacle({ index, limitOf }: Plan, dispenser: Dispenser, load: Pl
   return over(type.groupA, group.loads) || over(type.moduleA, loads) ? RATING : null;
 }
 
-function channelStands(type: ModuleSlots['type'], { amps, peakA }: NonNullable<PlannedLoad>): boolean {
+function channelStands(type: ModuleSlots['type'], { amps, peakA, leastA }: PlannedLoad): boolean {
   if (type.channelA !== null && amps > type.channelA + 1e-9) return false;
   if (type.channelPeakA !== null && peakA !== null && peakA > type.channelPeakA + 1e-9) return false;
-  return type.minLoadA === null || amps >= type.minLoadA - 1e-9;
+  return type.minLoadA === null || leastA >= type.minLoadA - 1e-9;
 }
 
 function inputObstacle(index: DesignIndex, dispenser: Dispenser, { type }: ModuleSlots, group: GroupSlots): number | null {
   const status = typeOf(index, dispenser)?.status;
   if (status && !statusFitsInput(status.polarity, type.polarity)) return POLARITY;
-  if (status && type.inputA !== null && status.maxA < type.inputA) return CHANNEL_RATING;
+  if (status && status.maxA < neededInputA(type) - 1e-12) return INPUT_CURRENT;
   return group.free.length === 0 ? NO_FREE : null;
 }
 

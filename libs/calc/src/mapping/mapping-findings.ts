@@ -26,16 +26,16 @@ export function laneMappingFindings(lane: LaneContext): Finding[] {
   const control = index.control.get(dispenser.id);
   const status = index.status.get(dispenser.id);
   if (!control && wantsControl(dispenser)) {
-    notice('MP-01', 'No control output', 'Map it to a free output channel, or run the auto-assignment',
+    notice('MP-01', 'No control output', 'Map it to a free output channel, or run the auto-assignment.',
       wiring === 'two-core' ? 'Its voltages leave out the output’s own drop until then.' : '');
   }
-  if (control && !wantsControl(dispenser)) notice('MP-09', 'It runs on its own clock, yet has a control output', 'Free the output channel');
-  if (!status && wantsStatus(index, dispenser)) notice('MP-02', 'No status input', 'Map it to a free input channel', 'Nobody sees it when the device reports a fault.');
+  if (control && !wantsControl(dispenser)) notice('MP-09', 'It runs on its own clock, yet has a control output', 'Free the output channel.');
+  if (!status && wantsStatus(index, dispenser)) notice('MP-02', 'No status input', 'Map it to a free input channel.', 'Nobody sees it when the device reports a fault.');
   if (status && !wantsStatus(index, dispenser) && wiring !== null) {
-    notice('MP-11', 'It has a status input, yet the device gives no status signal', 'Free the input channel');
+    notice('MP-11', 'It has a status input, yet the device gives no status signal', 'Free the input channel.');
   }
   if (dispenser.circuitId === null || !index.circuits.has(dispenser.circuitId)) {
-    notice('MP-12', 'No circuit', 'Choose the circuit that feeds it', 'Its voltages and loads on the supply are not computed.');
+    notice('MP-12', 'No circuit', 'Choose the circuit that feeds it.', 'Its voltages and loads on the supply are not computed.');
   }
   for (const assignment of [control, status]) if (assignment) controllerCheck(index, dispenser, assignment, notice);
   if (control) feedCheck(lane, control, notice);
@@ -48,7 +48,7 @@ function controllerCheck(index: DesignIndex, dispenser: Dispenser, assignment: A
   const module = index.modules.get(assignment.moduleId);
   if (!module || dispenser.controllerId === null || module.controllerId === dispenser.controllerId) return;
   const own = index.controllers.get(dispenser.controllerId)?.name ?? 'another controller';
-  notice('MP-10', `Its ${assignment.purpose} signal is on ${moduleLabel(index, module)}, it belongs to ${own}`, `Map it to a module of ${own}, or change its controller`);
+  notice('MP-10', `Its ${assignment.purpose} signal is on ${moduleLabel(index, module)}, it belongs to ${own}`, `Map it to a module of ${own}, or change its controller.`);
 }
 
 function feedCheck({ index, dispenser, circuit, wiring }: LaneContext, control: Assignment, notice: Notice): void {
@@ -60,7 +60,7 @@ function feedCheck({ index, dispenser, circuit, wiring }: LaneContext, control: 
   if (!feed || feed.id === dispenser.circuitId) return;
   const bond = feed.supplyId === circuit.supplyId ? '' : ' The two circuits have different supplies: their 0 V conductors must be bonded.';
   notice('MP-03', `Its output group is fed by ${feed.name}, the lane belongs to ${circuit.name}`,
-    `Feed the group from ${circuit.name}, or map the lane to a group fed by it`,
+    `Feed the group from ${circuit.name}, or map the lane to a group fed by it.`,
     (wiring === 'two-core' ? `Its motor current flows from ${feed.name}, so the loads of both circuits are not as computed.` : 'The pulse comes from another feeder than the device.') + bond);
 }
 
@@ -79,7 +79,7 @@ export function moduleMappingFindings(index: DesignIndex): Finding[] {
         findings.push(makeFinding('MP-05', 'module', module.id, label, {
           ...about,
           title: `${tag} is on channel ${a.channel}, the module has channels 0 to ${type.channels - 1}`,
-          remedy: 'Map it to a channel of the module',
+          remedy: 'Map it to a channel of the module.',
           compared: [{ name: 'channel', value: a.channel, limit: type.channels - 1, unit: '' }],
         }));
       }
@@ -87,7 +87,7 @@ export function moduleMappingFindings(index: DesignIndex): Finding[] {
         findings.push(makeFinding('MP-06', 'module', module.id, label, {
           ...about,
           title: `The ${a.purpose} signal of ${tag} is on an ${type.kind} module`,
-          remedy: `Map it to an ${a.purpose === 'control' ? 'output' : 'input'} module`,
+          remedy: `Map it to an ${a.purpose === 'control' ? 'output' : 'input'} module.`,
         }));
       }
     }
@@ -95,7 +95,7 @@ export function moduleMappingFindings(index: DesignIndex): Finding[] {
       if (users.length < 2) continue;
       findings.push(makeFinding('MP-07', 'channel', `${module.id}/${channel}`, `${label}, channel ${channel}`, {
         title: `${users.map((u) => tagOf(index, u.dispenserId)).join(' and ')} are on one channel`,
-        remedy: 'Map all but one to free channels',
+        remedy: 'Map all but one to free channels.',
         dispenserIds: users.map((u) => u.dispenserId),
       }));
     }
@@ -114,7 +114,7 @@ function unfedGroups(index: DesignIndex, moduleId: string, label: string, assign
     findings.push(makeFinding('MP-04', 'group', key, `${label}, group from channel ${Number(group) * type.channelsPerGroup}`, {
       title: 'No circuit feeds the group',
       detail: `${users.length} ${users.length === 1 ? 'channel is' : 'channels are'} in use.`,
-      remedy: 'Choose the circuit that feeds the group',
+      remedy: 'Choose the circuit that feeds the group.',
       dispenserIds: users.map((u) => u.dispenserId),
     }));
   }
@@ -128,7 +128,7 @@ function doubleSignals(index: DesignIndex): Finding[] {
     const { dispenserId, purpose } = rows[0];
     findings.push(makeFinding('MP-08', 'dispenser', dispenserId, tagOf(index, dispenserId), {
       title: `Its ${purpose} signal is on ${rows.length} channels`,
-      remedy: 'Free all but one',
+      remedy: 'Free all but one.',
       mark: purpose,
       dispenserIds: [dispenserId],
     }));

@@ -1,6 +1,6 @@
 import type { Assignment, Module, ModuleType } from '../design.ts';
 import { type DesignIndex, groupIndexOf, groupKey } from '../design-index.ts';
-import { channelLoad } from '../hardware/loads.ts';
+import { channelLoad, leastChannelA } from '../hardware/loads.ts';
 import type { Load } from '../hardware/load-sum.ts';
 import { NOMINAL_V } from '../wiring/network.ts';
 
@@ -55,12 +55,20 @@ export function occupy(index: DesignIndex, slots: ModuleSlots, { dispenserId, ch
 }
 
 /** Load that a dispenser will put on an output, A; with constant power that at its lowest voltage. */
-export function plannedLoad(index: DesignIndex, dispenserId: string): (Load & { readonly peakA: number | null }) | null {
+export interface PlannedLoad extends Load {
+  readonly peakA: number | null;
+  /** Smallest current that it can take, A. */
+  readonly leastA: number;
+}
+
+/** The load that a dispenser will be on an output; null where it takes no pulse from one. */
+export function plannedLoad(index: DesignIndex, dispenserId: string): PlannedLoad | null {
   const dispenser = index.dispensers.get(dispenserId);
   const type = dispenser?.typeId != null ? index.dispenserTypes.get(dispenser.typeId) : undefined;
   const atLowest = type?.load === 'constant-power' && type.minV > 0 ? (type.runA * NOMINAL_V) / type.minV : null;
   const load = channelLoad(index, dispenserId, atLowest);
-  return load && dispenser ? { id: dispenserId, circuitId: dispenser.circuitId, amps: load.amps, peakA: load.peakA } : null;
+  if (!load || !dispenser) return null;
+  return { id: dispenserId, circuitId: dispenser.circuitId, ...load, leastA: leastChannelA(index, dispenserId, load.amps) };
 }
 
 function emptyGroups(index: DesignIndex, module: Module, type: ModuleType): GroupSlots[] {

@@ -49,7 +49,7 @@ export function spareFindings(index: DesignIndex): Finding[] {
     findings.push(makeFinding('SP-01', 'cabinet', cabinetId, label, {
       title: `${Math.max(0, free)} of ${channels} ${kind} channels free, policy ${spare}`,
       detail: `${index.design.project.sparePercent} % of the channels of each kind stay free.`,
-      remedy: `Add an ${kind} module in ${label}, or move dispensers to another cabinet`,
+      remedy: `Add an ${kind} module in ${label}, or move dispensers to another cabinet.`,
       compared: [{ name: 'free channels', value: free, limit: spare, unit: '' }],
       mark: kind,
     }));

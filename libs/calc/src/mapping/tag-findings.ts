@@ -17,14 +17,14 @@ export function tagFindings(index: DesignIndex): Finding[] {
     ...doubled(cables(index)).map((users) =>
       makeFinding('CB-03', 'cable', users[0].id, users[0].name, {
         title: `${users[0].name} is the tag of ${users.length} cables: ${listed(users)}`,
-        remedy: 'Give each cable a tag of its own',
+        remedy: 'Give each cable a tag of its own.',
         dispenserIds: users.flatMap((user) => user.dispenserIds),
       }),
     ),
     ...doubled(designations(index)).map((users) =>
       makeFinding('TG-01', users[0].kind, users[0].id, users[0].label, {
         title: `${users[0].name} designates ${users.length} things: ${listed(users)}`,
-        remedy: 'Give each a designation of its own',
+        remedy: 'Give each a designation of its own.',
         dispenserIds: users.flatMap((user) => user.dispenserIds),
       }),
     ),

@@ -1,4 +1,4 @@
-import type { Dispenser } from '../design.ts';
+import type { Dispenser, DispenserType } from '../design.ts';
 import { formatNumber } from '../format.ts';
 import type { Noticed } from './finding.ts';
 import { PLAN_CODES } from './plan-codes.ts';
@@ -12,7 +12,7 @@ export function blankChecks(ctx: PlanCheckContext): Noticed[] {
   const { dispenser } = ctx;
   return [
     ...demandChecks(ctx),
-    ...(dispenser ? dispenserBlanks(dispenser) : [blank(PLAN_CODES.noDispenser, 'No dispenser at the point', 'The point gets no grease from this design, and no lane.', 'Add a dispenser to the point.')]),
+    ...(dispenser ? dispenserBlanks(dispenser, ctx.type) : [blank(PLAN_CODES.noDispenser, 'No dispenser at the point', 'The point gets no grease from this design, and no lane.', 'Add a dispenser to the point.')]),
   ];
 }
 
@@ -27,13 +27,14 @@ function demandChecks({ point, figures, dispenser }: PlanCheckContext): Noticed[
   return [...noticed, ...fastBearing(point)];
 }
 
-function dispenserBlanks(dispenser: Dispenser): Noticed[] {
+function dispenserBlanks(dispenser: Dispenser, type: DispenserType | null): Noticed[] {
   const noticed: Noticed[] = [];
   if (dispenser.typeId === null) {
     noticed.push(blank(PLAN_CODES.typeBlank, 'Dispenser type is blank', 'Currents, voltages, doses and run times of the lane are unknown and count nowhere.', 'Choose the dispenser type.'));
   }
   if (dispenser.wiring === null) {
-    noticed.push(blank(PLAN_CODES.wiringBlank, 'Wiring is blank', 'Cores, terminals and the load on the output cannot be told.', 'Choose two-core or four-core.'));
+    const until = type ? `Until it is chosen the wiring of the type counts: ${type.wiring}.` : 'Cores, terminals and the load on the output cannot be told.';
+    noticed.push(blank(PLAN_CODES.wiringBlank, 'Wiring is blank', until, 'Choose two-core or four-core.'));
   }
   if (dispenser.cartridgeUl === null) {
     noticed.push(blank(PLAN_CODES.cartridgeBlank, 'Cartridge size is blank', 'Pulses per cartridge, life and change date are unknown.', 'Choose a cartridge, or take one of the alternatives.'));

@@ -54,6 +54,15 @@ describe('assessPoint', () => {
     expect(codes({ point: aPoint({ statedUl: 83_000 }), dispenser: timed() })).toEqual([PLAN_CODES.timedTooLittle]);
   });
 
+  it('goes by the wiring of the row first, else by that of the type', () => {
+    const wired = (row: 'two-core' | 'four-core' | null, ofType: 'two-core' | 'four-core') =>
+      codes({ dispenser: timed({ wiring: row }), type: aType({ wiring: ofType }) }).includes(PLAN_CODES.timedTwoCore);
+    expect([wired('two-core', 'four-core'), wired('four-core', 'two-core'), wired(null, 'two-core'), wired(null, 'four-core')]).toEqual([true, false, true, false]);
+    const detail = (changes: Partial<PointContext>) => assessPoint(aContext(changes)).findings[0].detail;
+    expect(detail({ dispenser: aDispenser({ wiring: 'two-core' }) })).toBe('Cores, terminals and voltages are computed as two-core, currents as the type states them.');
+    expect(detail({ dispenser: aDispenser({ wiring: null }) })).toBe('Until it is chosen the wiring of the type counts: four-core.');
+  });
+
   it('lets a cartridge of twelve months stay where the policy says 365 days', () => {
     const dispenser = timed({ periodMonths: 12, cartridgeUl: 250_000 });
     expect(codes({ dispenser, point: aPoint({ statedUl: 42_500 }) })).toEqual([]);

@@ -1,3 +1,4 @@
+import { wiringBy } from '../design-index.ts';
 import { formatDemand, formatPercent } from '../format.ts';
 import type { Noticed } from './finding.ts';
 import { PLAN_CODES } from './plan-codes.ts';
@@ -11,13 +12,13 @@ export function timedChecks(ctx: PlanCheckContext): Noticed[] {
 }
 
 function supplyCheck({ dispenser, type }: PlanCheckContext): Noticed[] {
-  if ((type?.wiring ?? dispenser?.wiring) !== 'two-core') return [];
+  if (wiringBy(dispenser, type) !== 'two-core') return [];
   return [{
     code: PLAN_CODES.timedTwoCore,
     severity: 'error',
     title: 'Timed discharge needs a standing supply, which two-core wiring has not',
     source: 'type data',
-    remedy: 'Let the controller pulse it, or choose a four-core type.',
+    remedy: 'Let the controller pulse it, or choose four-core wiring and a four-core type.',
   }];
 }
 

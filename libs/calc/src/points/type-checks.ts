@@ -23,7 +23,7 @@ export function typeChecks({ dispenser, type }: PlanCheckContext): Noticed[] {
       code: PLAN_CODES.wiringContradicts,
       severity: 'error',
       title: `Wiring is ${dispenser.wiring}, the type is ${type.wiring}`,
-      detail: 'Cores, terminals and loads are computed by the type.',
+      detail: `Cores, terminals and voltages are computed as ${dispenser.wiring}, currents as the type states them.`,
       source: 'type data',
       remedy: `Set the wiring to ${type.wiring}, or choose a ${dispenser.wiring} type.`,
     });

@@ -8,6 +8,8 @@ export interface Currents {
   readonly alwaysReturn: Float64Array;
   readonly addedOut: Float64Array;
   readonly addedReturn: Float64Array;
+  /** Through protection and supply: what running adds, with the pulse input's current whichever conductor it takes. */
+  readonly addedSupply: Float64Array;
 }
 
 export function noCurrents(size: number): Currents {
@@ -16,12 +18,14 @@ export function noCurrents(size: number): Currents {
     alwaysReturn: new Float64Array(size),
     addedOut: new Float64Array(size),
     addedReturn: new Float64Array(size),
+    addedSupply: new Float64Array(size),
   };
 }
 
 /**
  * Fills the currents that flow at the given device voltages, V: constant loads as stated, constant
- * power as I = P/V. Lanes on their own clock always flow in full where `timedRun` holds.
+ * power as I = P/V. Lanes on their own clock always flow in full where `timedRun` holds. The current of
+ * the pulse input returns on 0 V with a sourcing output and comes over +24 V with a sinking one.
  */
 export function fillCurrents(network: CircuitNetwork, runV: Float64Array, idleV: Float64Array, timedRun: boolean, into: Currents): void {
   const { fourCore, loads } = network;
@@ -33,14 +37,15 @@ export function fillCurrents(network: CircuitNetwork, runV: Float64Array, idleV:
     const added = alwaysRuns ? 0 : runA - idleA;
     into.alwaysOut[i] = fourCore[i] ? always : 0;
     into.alwaysReturn[i] = always;
-    into.addedOut[i] = fourCore[i] ? added : 0;
-    into.addedReturn[i] = added + loads.controlA[i];
+    into.addedOut[i] = fourCore[i] ? added + (loads.pulseOnPlus[i] ? loads.controlA[i] : 0) : 0;
+    into.addedReturn[i] = added + (loads.pulseOnPlus[i] ? 0 : loads.controlA[i]);
+    into.addedSupply[i] = added + loads.controlA[i];
   }
 }
 
 /** Current through the motor of lane i while it runs, A. */
 export function motorRunA(network: CircuitNetwork, currents: Currents, i: number): number {
-  return currents.alwaysReturn[i] + currents.addedReturn[i] - network.loads.controlA[i];
+  return currents.alwaysReturn[i] + currents.addedSupply[i] - network.loads.controlA[i];
 }
 
 /** Sum of a column. */

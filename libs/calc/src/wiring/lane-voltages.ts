@@ -12,8 +12,12 @@ export interface LaneVoltages {
   readonly allOn: VoltageFigure | null;
   readonly aloneV: number | null;
   readonly collapsed: boolean;
+  /** No working point at all, with the worst set or only with all on: then no current is known either. */
+  readonly noWorkingPoint: 'worst' | 'all-on' | null;
   /** Largest current through the motor while it runs, A, and while it idles. */
   readonly runA: number;
+  /** The same with all on; where that has no working point the largest that is known. */
+  readonly allOnRunA: number;
   readonly idleA: number;
   /** Largest rise of the device's own 0 V over the supply's, V, and largest drop on its +24 V (four-core). */
   readonly zeroRiseV: number;
@@ -100,7 +104,7 @@ function addRise(
   const shared = Math.max(idle, runningDropV(network, at, t, limit));
   const own = network.ownOhm[t];
   if (at.conductors.zero) rises.zero = shared + own * (currents.alwaysReturn[t] + Math.max(0, currents.addedReturn[t]));
-  else rises.plus = shared + own * motorRunA(network, currents, t);
+  else rises.plus = shared + own * (currents.alwaysOut[t] + Math.max(0, currents.addedOut[t]));
   return rises;
 }
 
@@ -120,7 +124,9 @@ function readLane({ solution, everyone, profiler: profile }: Reader, at: Station
     allOn: figure(allOn, allOn.runV[t], everyone),
     aloneV: figure(alone, alone.runV[t], [])?.volts ?? null,
     collapsed: known[t] === 1 && !worstFigure,
+    noWorkingPoint: worst.collapsed ? 'worst' : allOn.collapsed ? 'all-on' : null,
     runA: motorRunA(network, worst.currents, t),
+    allOnRunA: Math.max(motorRunA(network, worst.currents, t), motorRunA(network, allOn.currents, t)),
     idleA: worst.currents.alwaysReturn[t],
     zeroRiseV: rise?.zero ?? 0,
     plusDropV: rise?.plus ?? 0,
@@ -188,7 +194,7 @@ function setDropV(network: CircuitNetwork, solved: CircuitVoltages, at: StationV
 }
 
 function addedBy(network: CircuitNetwork, { currents, upstream }: CircuitVoltages, { plus, zero }: Conductors, trunkOhm: number, i: number): number {
-  return currents.addedReturn[i] * (upstream.sharedOhm + zero * trunkOhm) + currents.addedOut[i] * plus * trunkOhm;
+  return currents.addedSupply[i] * upstream.sharedOhm + currents.addedReturn[i] * zero * trunkOhm + currents.addedOut[i] * plus * trunkOhm;
 }
 
 /** What a two-core lane has lost on its own core of the multicore up to a station, and in its output, V. */

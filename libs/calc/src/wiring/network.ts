@@ -2,6 +2,7 @@ import type { Circuit, Dispenser } from '../design.ts';
 import { type DesignIndex, moduleTypeOf, typeOf, wiringOf } from '../design-index.ts';
 import { type BoxTree, buildBoxTree } from './box-tree.ts';
 import { ohmPerMetre } from './conductor.ts';
+import { pulsePolarity } from './signals.ts';
 
 /**
  * A circuit as two trees. Everybody shares the supply's internal resistance and the protection. A
@@ -36,8 +37,10 @@ export interface LaneLoads {
   readonly timed: Uint8Array;
   readonly idle: Float64Array;
   readonly run: Float64Array;
-  /** Into the pulse input while the output is on; returns over 0 V, A. */
+  /** Through the pulse input while the output is on, A. */
   readonly controlA: Float64Array;
+  /** 1: a sinking output draws that current from the device's +24 V; 0: a sourcing one returns it on 0 V. */
+  readonly pulseOnPlus: Uint8Array;
 }
 
 /** Voltage at which a type's currents are stated. */
@@ -81,6 +84,7 @@ function emptyNetwork(circuit: Circuit, tree: BoxTree, dispensers: readonly Disp
       idle: new Float64Array(n),
       run: new Float64Array(n),
       controlA: new Float64Array(n),
+      pulseOnPlus: new Uint8Array(n),
     },
   };
 }
@@ -111,10 +115,10 @@ function loadLane({ loads, fourCore, minV, outputDropV, known }: CircuitNetwork,
   loads.run[i] = type.runA * factor;
   loads.controlA[i] = fourCore[i] && !loads.timed[i] ? (type.controlInputA ?? 0) : 0;
   minV[i] = type.minV;
-  if (!fourCore[i]) {
-    const control = index.control.get(dispenser.id);
-    outputDropV[i] = (control && moduleTypeOf(index, control.moduleId)?.dropV) ?? 0;
-  }
+  const control = index.control.get(dispenser.id);
+  const output = control && moduleTypeOf(index, control.moduleId);
+  loads.pulseOnPlus[i] = pulsePolarity(type, output) === 'sinking' ? 1 : 0;
+  if (!fourCore[i]) outputDropV[i] = output?.dropV ?? 0;
 }
 
 /** One core of the dispenser's own cable, Ω; null while length or section is unknown or not in the tables. */

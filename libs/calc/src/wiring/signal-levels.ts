@@ -1,7 +1,7 @@
 import type { Assignment, DispenserType, ModuleType } from '../design.ts';
 import { type DesignIndex, moduleTypeOf } from '../design-index.ts';
 import type { CircuitSolution, LaneVoltages } from './lane-voltages.ts';
-import { type ConductorDrops, INPUT_LIMITS, pulseLevelV, signalCoreOhm, statusLevelV } from './signals.ts';
+import { type ConductorDrops, inputCurrentA, pulseLevelV, pulsePolarity, signalCoreOhm, statusLevelV } from './signals.ts';
 
 export interface SignalLevels {
   readonly pulseLevelV: number | null;
@@ -21,15 +21,10 @@ export function signalLevels(index: DesignIndex, solution: CircuitSolution, i: n
   return {
     pulseLevelV:
       output?.kind === 'output' && type.controlInputA !== null
-        ? pulseLevelV(output.technology === 'relay' ? type.controlPolarity : output.polarity, drops, output.dropV, type.controlInputA, coreOhm)
+        ? pulseLevelV(pulsePolarity(type, output), drops, output.dropV, type.controlInputA, coreOhm)
         : null,
     statusLevelV: input?.kind === 'input' && type.status ? statusLevelV(type.status, drops, inputCurrentA(input), coreOhm) : null,
   };
-}
-
-/** Current that an input draws, A: as its type states, else the least that its IEC 61131-2 type asks for. */
-export function inputCurrentA(input: ModuleType): number {
-  return input.inputA ?? (input.inputType === null ? 0 : INPUT_LIMITS[input.inputType].onA);
 }
 
 function moduleAt(index: DesignIndex, assignment: Assignment | undefined): ModuleType | undefined {

@@ -32,7 +32,7 @@ export function signalCoreOhm(trunkSignalOhm: number, ownOhm: number): number {
 /**
  * Pulse level at a four-core device, V, between pulse input and the conductor it works against.
  * Sourcing: supply − output drop − I·R(core) − rise of the device's own 0 V. Sinking: the same against
- * +24 V, with the drop on that conductor.
+ * +24 V, with the drop on that conductor, which then carries the pulse current too.
  */
 export function pulseLevelV(output: Polarity, drops: ConductorDrops, outputDropV: number, controlA: number, coreOhm: number): number {
   const shared = output === 'sourcing' ? drops.zeroRiseV : drops.plusDropV;
@@ -61,8 +61,35 @@ export function outputFits(module: ModuleType, wanted: Polarity): boolean {
   return module.technology === 'relay' || module.polarity === wanted;
 }
 
+/** Polarity with which a lane is pulsed: that of its transistor output; over a relay, and while unmapped, what the device wants. */
+export function pulsePolarity(device: Pick<DispenserType, 'controlPolarity'>, output: ModuleType | null | undefined): Polarity {
+  return output?.kind === 'output' && output.technology !== 'relay' ? output.polarity : device.controlPolarity;
+}
+
+/** Current that an input draws, A: as its type states, else the least that its IEC 61131-2 type asks for. */
+export function inputCurrentA(input: ModuleType): number {
+  return input.inputA ?? leastInputA(input);
+}
+
+/** Current that a status output must deliver into an input, A: what it draws, and no less than its IEC 61131-2 type asks for. */
+export function neededInputA(input: ModuleType): number {
+  return Math.max(inputCurrentA(input), leastInputA(input));
+}
+
+/**
+ * Voltage that leakage leaves at an input that should be off, V: the input counts as a resistor that
+ * draws its current at 24 V. 0 where its current is unknown.
+ */
+export function leakageLevelV(leakageA: number, input: ModuleType): number {
+  const amps = inputCurrentA(input);
+  return amps > 0 ? (leakageA * 24) / amps : 0;
+}
+
+function leastInputA(input: ModuleType): number {
+  return input.inputType === null ? 0 : INPUT_LIMITS[input.inputType].onA;
+}
+
 /** Operations of a relay contact in the years it must last. */
 export function relayOperations(pulsesPerYear: number, years: number): number {
   return pulsesPerYear * years;
 }
-

@@ -80,14 +80,14 @@ function addUp(
   { station, ids }: CircuitNetwork, currents: Currents, shared: Float64Array, { plus, zero }: Conductors, upstream: Upstream,
   addedV: Float64Array,
 ): number {
-  const { alwaysOut, alwaysReturn, addedOut, addedReturn } = currents;
+  const { alwaysOut, alwaysReturn, addedOut, addedReturn, addedSupply } = currents;
   let alwaysV = upstream.otherDropV;
   for (let i = 0; i < ids.length; i++) {
     const trunk = shared[station[i]];
-    const returnOhm = upstream.sharedOhm + zero * trunk;
+    const returnOhm = zero * trunk;
     const outOhm = plus * trunk;
-    alwaysV += alwaysReturn[i] * returnOhm + alwaysOut[i] * outOhm;
-    addedV[i] = addedReturn[i] * returnOhm + addedOut[i] * outOhm;
+    alwaysV += alwaysReturn[i] * (upstream.sharedOhm + returnOhm) + alwaysOut[i] * outOhm;
+    addedV[i] = addedSupply[i] * upstream.sharedOhm + addedReturn[i] * returnOhm + addedOut[i] * outOhm;
   }
   return alwaysV;
 }

@@ -1,8 +1,9 @@
 import type { CircuitContext, LaneContext } from '../assess-context.ts';
 import { makeFinding } from '../finding-codes.ts';
 import type { Finding } from '../findings.ts';
-import { ampsAgainstMaximum, formatAmps, formatSection, formatVolts, voltsAgainstMinimum } from '../format.ts';
+import { ampsAgainstMaximum, formatSection, formatVolts, voltsAgainstMinimum } from '../format.ts';
 import { isStandardSection } from './conductor.ts';
+import { overloadText } from './protection.ts';
 
 const TOLERANCE_V = 1e-9;
 
@@ -36,32 +37,37 @@ function belowWithAllOn(lane: LaneContext, minV: number): Finding {
   const { dispenser, tag, figures } = lane;
   const volts = figures.allOn?.volts;
   return makeFinding('VD-03', 'dispenser', dispenser.id, tag, {
-    title: volts === undefined ? 'The voltage collapses with all on' : `${voltsAgainstMinimum(volts)} with all on, needs ${formatVolts(minV)}`,
+    title: volts === undefined ? `${NO_VOLTAGE[lane.voltages?.noWorkingPoint === 'all-on' ? 'collapse' : 'nothing']} with all on` : `${voltsAgainstMinimum(volts)} with all on, needs ${formatVolts(minV)}`,
     detail: worstCaseText(lane),
-    remedy: 'Keep forcing under control, or enlarge the cable until all may run',
+    remedy: 'Keep forcing under control, or enlarge the cable until all may run.',
     compared: volts === undefined ? [] : [{ name: 'voltage with all on', value: volts, limit: minV, unit: 'V' }],
     dispenserIds: [dispenser.id],
   });
 }
 
+const NO_VOLTAGE = { collapse: 'The voltage collapses', nothing: 'No voltage is left at the device' } as const;
+
+/** Constant-power loads without a working point, or a current so large that nothing is left at the device. */
 function collapse(lane: LaneContext): Finding {
+  const collapses = lane.voltages?.noWorkingPoint === 'worst';
   return makeFinding('VD-04', 'dispenser', lane.dispenser.id, lane.tag, {
-    title: 'The voltage collapses with the worst set',
-    detail: 'The loads ask for more than the cables can carry: the network has no working point.',
-    remedy: 'Set a smaller k, enlarge the trunk, or shorten the cables',
+    title: `${NO_VOLTAGE[collapses ? 'collapse' : 'nothing']} with the worst set`,
+    detail: collapses
+      ? 'The loads ask for more than the cables can carry: the network has no working point. Currents and loads of its channels, circuit and supply are stated as without any drop: they are too low, and no check of them counts until this is mended.'
+      : 'The drop on the way takes all that the supply gives.',
+    remedy: 'Set a smaller k, enlarge the trunk, or shorten the cables.',
     dispenserIds: [lane.dispenser.id],
   });
 }
 
 /** Says what all on would do, and what holds then, since k is kept by software. */
-function worstCaseText({ circuit, circuitFigures, figures }: LaneContext): string {
+function worstCaseText({ index, circuit, circuitFigures, figures, voltages }: LaneContext): string {
   if (!circuit || !circuitFigures) return '';
-  const all = figures.allOn ? `With all on: ${voltsAgainstMinimum(figures.allOn.volts)}, ${ampsAgainstMaximum(circuitFigures.allOnA)}.` : '';
-  const holds =
-    circuitFigures.allOnA > circuit.protectionA
-      ? `The ${formatAmps(circuit.protectionA)} protection of ${circuit.name} acts then.`
-      : 'No protection acts then: the program alone keeps the limit.';
-  return `${all} ${holds}`.trim();
+  if (voltages?.noWorkingPoint) return 'With all on the circuit has no working point, so its current is not known.';
+  const { allOnA } = circuitFigures;
+  const overload = overloadText(circuit, allOnA, index.design.project.breakerDcFactor);
+  const all = figures.allOn ? `With all on: ${voltsAgainstMinimum(figures.allOn.volts)}${overload ? '' : `, ${ampsAgainstMaximum(allOnA)}`}.` : '';
+  return `${all} ${overload ?? 'No protection acts then: the program alone keeps the limit.'}`.trim();
 }
 
 function voltageRemedy({ circuit, circuitFigures, figures, dispenser }: LaneContext): string {
@@ -72,7 +78,7 @@ function voltageRemedy({ circuit, circuitFigures, figures, dispenser }: LaneCont
   if (section !== null && section > (dispenser.crossSectionMm2 ?? 0)) ways.push(`lay its own cable in ${formatSection(section)}`);
   if (ways.length === 0) ways.push('enlarge the trunk', 'feed it from a nearer circuit');
   const text = ways.join(', or ');
-  return text.charAt(0).toUpperCase() + text.slice(1);
+  return `${text.charAt(0).toUpperCase()}${text.slice(1)}.`;
 }
 
 /** What keeps a lane's voltage from being known: blanks and cross-sections that the tables do not hold. */
@@ -89,7 +95,7 @@ export function laneCableFindings({ dispenser, tag, circuit, index }: LaneContex
       ...about,
       title: `The cable has no ${blanks.join(' and no ')}`,
       detail: 'Its voltage is not computed.',
-      remedy: `Enter the ${blanks.join(' and the ')} of its own cable`,
+      remedy: `Enter the ${blanks.join(' and the ')} of its own cable.`,
     }));
   }
   const section = dispenser.crossSectionMm2;
@@ -98,7 +104,7 @@ export function laneCableFindings({ dispenser, tag, circuit, index }: LaneContex
       ...about,
       title: `No resistance known for ${formatSection(section)}`,
       detail: 'Its voltage is not computed.',
-      remedy: 'Choose a standard cross-section from 0.5 to 16 mm²',
+      remedy: 'Choose a standard cross-section from 0.5 to 16 mm².',
     }));
   }
   const node = dispenser.nodeId === null ? null : index.nodes.get(dispenser.nodeId);
@@ -107,7 +113,7 @@ export function laneCableFindings({ dispenser, tag, circuit, index }: LaneContex
       ...about,
       title: `Its box ${node?.location ?? ''} does not belong to ${circuit.name}`.replace('  ', ' '),
       detail: 'Its voltage is not computed.',
-      remedy: `Choose a box of ${circuit.name}, or move the lane to the box’s circuit`,
+      remedy: `Choose a box of ${circuit.name}, or move the lane to the box’s circuit.`,
     }));
   }
   return findings;
@@ -119,7 +125,7 @@ export function trunkFindings({ index, circuit, solution }: CircuitContext): Fin
     makeFinding(kind === 'loop' ? 'CB-05' : 'CB-02', 'cable', node.id, node.cableTag, {
       title: kind === 'loop' ? `The trunk to ${node.location} runs in a loop` : message,
       detail: 'Voltages behind it are not computed.',
-      remedy: kind === 'loop' ? 'Let one box of the loop hang on the cabinet' : 'Choose a standard cross-section from 0.5 to 16 mm²',
+      remedy: kind === 'loop' ? 'Let one box of the loop hang on the cabinet.' : 'Choose a standard cross-section from 0.5 to 16 mm².',
     }),
   );
   for (const node of index.nodesByCircuit.get(circuit.id) ?? []) {
@@ -128,7 +134,7 @@ export function trunkFindings({ index, circuit, solution }: CircuitContext): Fin
     findings.push(makeFinding('CB-04', 'cable', node.id, node.cableTag, {
       title: `${node.location} hangs on ${parent?.location ?? 'a box'} of another circuit`,
       detail: `It counts as hanging on the terminals of ${circuit.name}.`,
-      remedy: `Choose a box of ${circuit.name} before it, or the cabinet`,
+      remedy: `Choose a box of ${circuit.name} before it, or the cabinet.`,
     }));
   }
   return findings;

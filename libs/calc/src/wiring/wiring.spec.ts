@@ -72,7 +72,7 @@ describe('voltages of one lane', () => {
   it('are found too low, with the k and the section that would do', () => {
     const lanes = ['P-01', 'P-02', 'P-03'].map((name) => buildLane(name, { nodeId: 'box' }));
     const { find, lane } = solved({ lanes, cableNodes: [buildNode({ lengthM: 120, powerMm2: 1.5 })], supplyTypes: [buildSupplyType({ tolerancePercent: 5 })] });
-    expect(find('VD-01')).toMatchObject({ severity: 'error', source: 'type data', remedy: 'Set k to 2 on C1, or lay its own cable in 2.5\u2009mm²' });
+    expect(find('VD-01')).toMatchObject({ severity: 'error', source: 'type data', remedy: 'Set k to 2 on C1, or lay its own cable in 2.5\u2009mm².' });
     expect(find('VD-01')?.title).toMatch(/^19\.\d\u2009V while 3 run, needs 20\.0\u2009V$/);
     expect(lane.smallestPassingMm2).toBe(2.5);
   });
@@ -123,7 +123,7 @@ describe('protection', () => {
     const loop = 200 * ohmPerMetre(0.75, 5, 70);
     expect(result.circuits.get('circuit')).toMatchObject({ tripA: 6 * 5 * 1.5, shortCircuitAt: 'P-01' });
     expect(result.circuits.get('circuit')!.shortCircuitA).toBeCloseTo(23.76 / loop, 9);
-    expect(find('PR-02')?.remedy).toBe('Choose electronic protection, a larger section, or a smaller rating');
+    expect(find('PR-02')?.remedy).toBe('Choose electronic protection, a smaller rating, or a supply that delivers 45.00\u2009A.');
   });
 
   it('is limited by what the supply can deliver', () => {
@@ -149,7 +149,7 @@ describe('protection', () => {
     const lanes = Array.from({ length: 5 }, (_, i) => buildLane(`P-0${i + 1}`, { typeId: 'type-2', wiring: 'two-core', cableLengthM: 1 }));
     const types = { dispenserTypes: [buildTwoCoreType({ runA: 0.5 })], project: buildProject() };
     const at = (k: number | null) => solved({ ...types, lanes, circuits: [buildCircuit({ protectionA: 2, concurrencyLimit: k })] });
-    expect(at(null).find('PR-01')?.remedy).toBe('Set k to 4 on C1, or split the circuit');
+    expect(at(null).find('PR-01')?.remedy).toBe('Set k to 4 on C1, or split the circuit.');
     expect(at(4).find('PR-01')).toBeUndefined();
     expect(at(4).find('PR-05')).toMatchObject({ severity: 'note' });
   });

@@ -114,7 +114,7 @@ function lowerVoltages(supply: SupplyCase, states: readonly State[], only: numbe
 /** Largest current that a circuit can draw from its supply, A. */
 function worstSupplyA(currents: Currents, limit: number): number {
   let sum = total(currents.alwaysReturn);
-  for (const i of largestPositive(currents.addedReturn, limit)) sum += currents.addedReturn[i];
+  for (const i of largestPositive(currents.addedSupply, limit)) sum += currents.addedSupply[i];
   return sum;
 }
 
@@ -156,9 +156,9 @@ export function othersBeside(timed: boolean, limit: number): number {
 /** Drop on the lane's own conductors and in its output while it runs, V. */
 export function ownRunDropV(network: CircuitNetwork, currents: Currents, t: number): number {
   const motorA = motorRunA(network, currents, t);
-  const returnA = currents.alwaysReturn[t] + currents.addedReturn[t];
   const own = network.ownOhm[t];
-  if (network.fourCore[t]) return own * (motorA + returnA);
+  // The pulse input's current takes one of the two cores, whichever its polarity.
+  if (network.fourCore[t]) return own * (2 * motorA + network.loads.controlA[t]);
   return network.outputDropV[t] + (network.tree.signalOhm[network.station[t]] + 2 * own) * motorA;
 }
 

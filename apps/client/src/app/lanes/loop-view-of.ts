@@ -1,4 +1,4 @@
-import type { Assessment, Circuit, Design, Dispenser, DispenserType, LaneFigures, Point } from '#calc';
+import { type Assessment, type Circuit, type Design, type Dispenser, type DispenserType, type LaneFigures, type Point, type Wiring, wiringBy } from '#calc';
 import type { LoopBox, LoopChannel, LoopProfile, LoopSupply, LoopView } from '../shared/lane/loop-view';
 
 /** What belongs to one lane, looked up once. */
@@ -6,6 +6,7 @@ export interface LaneRows {
   readonly dispenser: Dispenser;
   readonly point: Point;
   readonly type: DispenserType | null;
+  readonly wiring: Wiring | null;
   readonly circuit: Circuit | null;
   readonly figures: LaneFigures | null;
 }
@@ -14,9 +15,10 @@ export function laneRowsOf(design: Design, assessment: Assessment, dispenserId: 
   const dispenser = design.dispensers.find((d) => d.id === dispenserId);
   const point = design.points.find((p) => p.id === dispenser?.pointId);
   if (!dispenser || !point) return null;
+  const type = design.dispenserTypes.find((t) => t.id === dispenser.typeId) ?? null;
   return {
-    dispenser, point,
-    type: design.dispenserTypes.find((t) => t.id === dispenser.typeId) ?? null,
+    dispenser, point, type,
+    wiring: wiringBy(dispenser, type),
     circuit: design.circuits.find((c) => c.id === dispenser.circuitId) ?? null,
     figures: assessment.lanes.get(dispenserId) ?? null,
   };
@@ -25,7 +27,7 @@ export function laneRowsOf(design: Design, assessment: Assessment, dispenserId: 
 /** The loop diagram of a lane; null while its wiring is not chosen. */
 export function loopViewOf(design: Design, assessment: Assessment, rows: LaneRows): LoopView | null {
   const { dispenser, point, type, figures } = rows;
-  const wiring = dispenser.wiring ?? type?.wiring;
+  const wiring = rows.wiring;
   if (!wiring) return null;
   const output = channelOf(design, dispenser.id, 'control', figures?.outputAddress);
   const status = channelOf(design, dispenser.id, 'status', figures?.statusAddress);

@@ -1,4 +1,4 @@
-import type { Design, Dispenser, Purpose } from '#calc';
+import { type Design, type Dispenser, type Purpose, wiringBy } from '#calc';
 import type { RowChange } from '#contract';
 import { v7 as newId } from 'uuid';
 import { type ChannelRow, channelKey, type GroupSection, type Proposal } from './mapping-rows';
@@ -34,7 +34,8 @@ export function missingPurposes(design: Design, dispenser: Dispenser): readonly 
   const has = (purpose: Purpose) => design.assignments.some((a) => a.dispenserId === dispenser.id && a.purpose === purpose);
   const wanted: Purpose[] = [];
   if (dispenser.method === 'pulse' && !has('control')) wanted.push('control');
-  if (dispenser.wiring === 'four-core' && !has('status')) wanted.push('status');
+  const type = design.dispenserTypes.find((t) => t.id === dispenser.typeId) ?? null;
+  if (wiringBy(dispenser, type) === 'four-core' && !has('status')) wanted.push('status');
   return wanted;
 }
 

@@ -45,7 +45,7 @@ export function planRows(design: Design, assessment: Assessment, { point, dispen
 }
 
 /** Voltages, levels and loads, each against its limit. */
-export function electricRows(design: Design, assessment: Assessment, { dispenser, figures, circuit }: LaneRows): readonly FigureRow[] {
+export function electricRows(design: Design, assessment: Assessment, { wiring, figures, circuit }: LaneRows): readonly FigureRow[] {
   if (!figures) return [];
   const low = (volts: number | undefined): boolean => volts !== undefined && figures.minV !== null && volts < figures.minV;
   const least = figures.minV === null ? '' : `at least ${formatVolts(figures.minV)}`;
@@ -57,7 +57,7 @@ export function electricRows(design: Design, assessment: Assessment, { dispenser
     row(`Worst voltage${k ? `, ${k} running` : ''}`, voltsAgainstMinimum(figures.worst?.volts ?? null), 'worstVoltage', least, low(figures.worst?.volts)),
     row('With all on', voltsAgainstMinimum(figures.allOn?.volts ?? null), 'allOnVoltage', 'k is kept by software only', low(figures.allOn?.volts)),
     row('Alone, supply as set', formatVolts(figures.aloneV), 'aloneVoltage', 'what a meter should read'),
-    ...(dispenser.wiring === 'four-core' ? [
+    ...(wiring === 'four-core' ? [
       row('Idle', voltsAgainstMinimum(figures.idle?.volts ?? null), 'idleVoltage', least, low(figures.idle?.volts)),
       row('Pulse level at the device', voltsAgainstMinimum(figures.pulseLevelV), 'pulseLevel'),
       row('Status level at the input', voltsAgainstMinimum(figures.statusLevelV), 'statusLevel'),

@@ -72,11 +72,11 @@ export class LanePage {
   protected readonly facts = computed(() => {
     const rows = this.rows();
     if (!rows) return [];
-    const { dispenser, type, circuit, figures } = rows;
+    const { dispenser, type, wiring, circuit, figures } = rows;
     return [
       { label: 'Type', text: type?.name ?? 'not chosen', code: false },
       { label: 'Circuit', text: circuit ? `${circuit.name}, ${protectionText(circuit)}, k = ${circuit.concurrencyLimit ?? 'all'}` : 'none', code: false },
-      { label: 'Output, status', text: [figures?.outputAddress ?? 'no output', ...(dispenser.wiring === 'four-core' ? [figures?.statusAddress ?? 'no status'] : [])].join(', '), code: true },
+      { label: 'Output, status', text: [figures?.outputAddress ?? 'no output', ...(wiring === 'four-core' ? [figures?.statusAddress ?? 'no status'] : [])].join(', '), code: true },
       { label: 'Own cable', text: `${dispenser.cableTag ?? 'no tag'}, ${formatMetres(dispenser.cableLengthM)}, ${formatSection(dispenser.crossSectionMm2)}`, code: false },
       { label: 'Whole run', text: formatMetres(figures?.runLengthM ?? null), code: false },
     ];

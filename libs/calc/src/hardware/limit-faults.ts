@@ -1,0 +1,72 @@
+import { motorRunA } from '../wiring/currents.ts';
+import type { CircuitNetwork } from '../wiring/network.ts';
+import type { CircuitVoltages } from '../wiring/worst-case.ts';
+import { circuitLoads, standingA } from './circuit-load.ts';
+import type { LimitTrial } from './largest-k.ts';
+import { type LimitOf, sumLoads, worstSum } from './load-sum.ts';
+import type { RatedSum } from './loads.ts';
+
+/** Tolerance against binary noise, V and A. */
+export const TOLERANCE = 1e-9;
+
+/** Something that does not pass with a k that is tried. */
+export interface Fault {
+  readonly key: string;
+  /** On the circuit itself, in a group or module of its lanes, or on its supply. */
+  readonly own: boolean;
+}
+
+/** Lanes whose voltage is under their minimum, by place. */
+export function failingLanes({ known, fourCore, minV }: CircuitNetwork, { runV, idleV }: CircuitVoltages): number[] {
+  const failing: number[] = [];
+  for (let i = 0; i < runV.length; i++) {
+    const lowest = fourCore[i] ? Math.min(runV[i], idleV[i]) : runV[i];
+    if (known[i] && lowest < minV[i] - TOLERANCE) failing.push(i);
+  }
+  return failing;
+}
+
+/** Finds all that does not pass on a supply solved with a k, the loads taken from the currents so solved. */
+export function faultFinder(trial: LimitTrial): (voltages: readonly CircuitVoltages[], k: number) => Fault[] {
+  const { solved: { supply, circuits }, at, supplyMayA } = trial;
+  const networks = circuits.map(({ network }) => network);
+  const { circuit } = networks[at];
+  const places = placesOf(trial, networks);
+  return (voltages, k) => {
+    const limits: LimitOf = (id) => (id === circuit.id ? k : trial.limitOf(id));
+    const faults: Fault[] = [];
+    let supplyA = supply.otherLoadA;
+    networks.forEach((network, c) => {
+      const { currents, collapsed } = voltages[c];
+      const amps = standingA(currents) + worstSum(sumLoads(circuitLoads(network, currents)), limits);
+      supplyA += amps;
+      const fault = (what: string): number => faults.push({ key: `${what} ${c}`, own: c === at });
+      if (collapsed) fault('collapse');
+      else for (const i of failingLanes(network, voltages[c])) fault(`lane ${i}`);
+      if (amps > network.circuit.protectionA + TOLERANCE) fault('protection');
+    });
+    if (supplyA > supplyMayA + TOLERANCE) faults.push({ key: 'supply', own: true });
+    const motors = motorCurrents(networks, voltages);
+    places.forEach(({ loads, sum, ratingA }, i) => {
+      const now = sumLoads(loads.map((load) => ({ ...load, amps: motors.get(load.id) ?? load.amps })));
+      if (worstSum(now, limits) > ratingA + TOLERANCE) faults.push({ key: `place ${i}`, own: sum.byCircuit.has(circuit.id) });
+    });
+    return faults;
+  };
+}
+
+/** Every rated group and module with a lane of a circuit on the supply, each once. */
+function placesOf({ rated }: LimitTrial, networks: readonly CircuitNetwork[]): RatedSum[] {
+  return [...new Set(networks.flatMap(({ circuit }) => rated.get(circuit.id) ?? []))];
+}
+
+/** Currents of the motors that outputs drive directly, by dispenser; a four-core lane loads its output with its pulse input alone. */
+function motorCurrents(networks: readonly CircuitNetwork[], voltages: readonly CircuitVoltages[]): Map<string, number> {
+  const amps = new Map<string, number>();
+  networks.forEach((network, c) => {
+    network.ids.forEach((id, i) => {
+      if (!network.fourCore[i]) amps.set(id, motorRunA(network, voltages[c].currents, i));
+    });
+  });
+  return amps;
+}
