@@ -1,7 +1,7 @@
 import type { CableNode } from '#calc';
 
 /** How one level of the tree is drawn left of a row: a trunk that goes on, the branch to this row, or nothing. */
-export type Guide = 'through' | 'branch' | 'last' | 'none';
+export type Guide = 'through' | 'branch' | 'last' | 'gap';
 
 export interface TreeRow {
   readonly node: CableNode;
@@ -44,4 +44,4 @@ function childrenOf(nodes: readonly CableNode[]): ReadonlyMap<string | null, rea
 }
 
 const guidesOf = (above: readonly boolean[], goesOn: boolean): readonly Guide[] =>
-  [...above.map((on): Guide => (on ? 'through' : 'none')), goesOn ? 'branch' : 'last'];
+  [...above.map((on): Guide => (on ? 'through' : 'gap')), goesOn ? 'branch' : 'last'];

@@ -22,7 +22,8 @@ export class HardwareViewStore {
   readonly trees = computed(() => this.from(({ design }) => treeViews(design)));
   readonly circuitChoices = computed(() => this.from(({ design }) =>
     [...design.circuits].sort(by((c) => c.name)).map((c): Choice<string> => ({ value: c.id, label: c.name }))));
-  readonly supplyTypeChoices = computed(() => this.from(({ design }) => design.supplyTypes.map((t): Choice<string> => ({ value: t.id, label: t.name }))));
+  readonly supplyTypeChoices = computed(() => this.from(({ design }) =>
+    design.supplyTypes.map((t): Choice<string> => ({ value: t.id, label: t.typeVersion > 1 ? `${t.name}, version ${t.typeVersion}` : t.name }))));
 
   private readonly findings = computed<ReadonlyMap<string, readonly Finding[]>>(() =>
     bySubject(this.state()?.assessment.findings ?? []));

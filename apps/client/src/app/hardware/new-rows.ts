@@ -1,5 +1,5 @@
-import type { Cabinet, CableNode, Circuit, Controller, Design, Supply } from '#calc';
-import { choiceField, type NewField, type NewRow } from './add-row/new-row';
+import type { Cabinet, CableNode, Circuit, Controller, Design, ModuleType, Supply } from '#calc';
+import { choiceField, type NewField, type NewRow, type Values } from './add-row/new-row';
 import { PROTECTIONS, READ, sectionsWith } from './fields/readers';
 import type { Choice } from './fields/save-select';
 import { nextFreeByte, nextName, nextSlot } from './rack';
@@ -24,26 +24,27 @@ export function newController(design: Design, cabinet: Cabinet): NewRow {
   };
 }
 
-/** The base byte suggested follows the kind of the type chosen: outputs and inputs count apart. */
+/** The name and the base byte suggested follow the type chosen: outputs and inputs count apart. */
 export function newModule(design: Design, controller: Controller): NewRow {
-  const taken = design.modules.filter((m) => m.controllerId === controller.id).map((m) => m.name);
-  const kindOf = (typeId: string) => design.moduleTypes.find((type) => type.id === typeId)?.kind;
+  const own = design.modules.filter((m) => m.controllerId === controller.id);
+  const types = new Map(design.moduleTypes.map((type) => [type.id, type]));
+  const ofType = (suggest: (type: ModuleType) => string) => (values: Values) => {
+    const type = types.get(values['typeId'] ?? '');
+    return type ? suggest(type) : '';
+  };
+  const namesLike = ({ technology }: ModuleType) => own.filter((m) => types.get(m.typeId)?.technology === technology).map((m) => m.name);
   return {
     collection: 'modules', title: `Add a module to ${controller.name}`,
     fixed: { controllerId: controller.id, slot: nextSlot(design.modules, controller.id) },
     fields: [
       choiceField('typeId', 'Type', latest(design.moduleTypes)),
-      name('name', 'Name', taken, '-KF1'),
-      {
-        field: 'baseByte', label: 'Base byte', read: READ.baseByte,
-        suggest: (values) => {
-          const kind = kindOf(values['typeId'] ?? '');
-          return kind ? String(nextFreeByte(design, controller.id, kind)) : '';
-        },
-      },
+      { ...name('name', 'Name', own.map((m) => m.name), ''), suggest: ofType((type) => nextName(namesLike(type), FIRST_NAME[type.technology])) },
+      { field: 'baseByte', label: 'Base byte', read: READ.baseByte, suggest: ofType((type) => String(nextFreeByte(design, controller.id, type.kind))) },
     ],
   };
 }
+
+const FIRST_NAME: Readonly<Record<ModuleType['technology'], string>> = { transistor: 'DO1', relay: 'RO1', input: 'DI1' };
 
 export function newSupply(design: Design): NewRow {
   return {

@@ -10,22 +10,25 @@ export interface Deletion {
   readonly held: string;
 }
 
-/** Names what goes before it goes. Answers true to delete. */
+/** Names what goes before it goes, or what has to go first. Answers true to delete. */
 @Component({
   selector: 'lw-confirm-delete',
   imports: [MatButton, MatDialogActions, MatDialogClose, MatDialogContent, MatDialogTitle],
   changeDetection: ChangeDetectionStrategy.OnPush,
   styles: 'mat-dialog-content { display: grid; gap: 10px; }',
   template: `
-    <h2 matDialogTitle>Delete {{ data.name }}?</h2>
-    <mat-dialog-content>
-      <p>{{ data.goes }} This cannot be undone.</p>
-      @if (data.held) { <p>Still on it: {{ data.held }}. It can only go when these are gone or moved.</p> }
-    </mat-dialog-content>
-    <mat-dialog-actions align="end">
-      <button matButton type="button" [mat-dialog-close]="false">Keep</button>
-      <button matButton="filled" type="button" [mat-dialog-close]="true">Delete</button>
-    </mat-dialog-actions>`,
+    @if (data.held) {
+      <h2 matDialogTitle>{{ data.name }} cannot be deleted yet</h2>
+      <mat-dialog-content><p>Still on it: {{ data.held }}. Move or delete these first.</p></mat-dialog-content>
+      <mat-dialog-actions align="end"><button matButton="filled" type="button" [mat-dialog-close]="false">Close</button></mat-dialog-actions>
+    } @else {
+      <h2 matDialogTitle>Delete {{ data.name }}?</h2>
+      <mat-dialog-content><p>{{ data.goes }} This cannot be undone.</p></mat-dialog-content>
+      <mat-dialog-actions align="end">
+        <button matButton type="button" [mat-dialog-close]="false">Keep</button>
+        <button matButton="filled" type="button" [mat-dialog-close]="true">Delete</button>
+      </mat-dialog-actions>
+    }`,
 })
 export class ConfirmDelete {
   protected readonly data = inject<Deletion>(MAT_DIALOG_DATA);

@@ -2,7 +2,7 @@ import { ChangeDetectionStrategy, Component, inject } from '@angular/core';
 import { SaveField } from '../fields/save-field';
 import { FoundList } from '../found-list/found-list';
 import { HardwareViewStore } from '../hardware-view-store';
-import { POLICIES } from './policies';
+import { POLICIES, type Policy } from './policies';
 
 /** The defaults of the project that a user may change, each with what it does and where it comes from. */
 @Component({
@@ -19,7 +19,7 @@ import { POLICIES } from './policies';
           @for (policy of part.policies; track policy.field) {
             <div class="policy">
               <lw-save-field [label]="policy.label" [unit]="policy.unit" [number]="policy.unit !== ''" [blank]="policy.blank ?? ''" [value]="policy.text(project)" [read]="policy.read"
-                [editable]="view.canEdit()" (saved)="view.edit('projects', project.id, { [policy.field]: $event })" />
+                [editable]="view.canEdit()" (saved)="save(project.id, policy, $event)" />
               <p class="small">{{ policy.does }} <span class="quiet">{{ policy.source }}.</span></p>
             </div>
           }
@@ -30,4 +30,8 @@ import { POLICIES } from './policies';
 export class PoliciesSection {
   protected readonly view = inject(HardwareViewStore);
   protected readonly parts = POLICIES;
+
+  protected save(projectId: string, policy: Policy, value: string | number | null): void {
+    this.view.edit('projects', projectId, { [policy.field]: value });
+  }
 }

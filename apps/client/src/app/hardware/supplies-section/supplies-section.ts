@@ -44,7 +44,7 @@ export class SuppliesSection {
       { name: 'Standing', text: ampsAgainstMaximum(f.standingA) }, { name: 'Worst under k', text: ampsAgainstMaximum(f.worstA) },
       { name: 'All on', text: ampsAgainstMaximum(f.allOnA) }, { name: 'Demand with margin', text: ampsAgainstMaximum(f.demandA), bad: f.demandA > f.ratingA },
       { name: 'Derated rating', text: ampsAgainstMinimum(f.ratingA) }, { name: 'Headroom', text: ampsAgainstMinimum(f.headroomA), bad: f.headroomA < 0 },
-      { name: 'Room for', text: roomFor(f.headroomDispensers) }, { name: 'Lowest voltage', text: voltsAgainstMinimum(f.lowestV) },
+      { name: 'Room for dispensers', text: roomFor(f.headroomDispensers) }, { name: 'Lowest voltage', text: voltsAgainstMinimum(f.lowestV) },
     ];
   }
 
@@ -59,5 +59,4 @@ export class SuppliesSection {
   }
 }
 
-const roomFor = (dispensers: number | null): string =>
-  dispensers === null ? NOTHING : `${dispensers} more ${dispensers === 1 ? 'dispenser' : 'dispensers'} at once`;
+const roomFor = (dispensers: number | null): string => (dispensers === null ? NOTHING : `${dispensers} more at once`);
