@@ -2,7 +2,7 @@ import { sql } from 'drizzle-orm';
 import type { AnyPgColumn } from 'drizzle-orm/pg-core';
 import { bigint, check, doublePrecision, integer, jsonb, pgTable, text, unique } from 'drizzle-orm/pg-core';
 import { createdAt, orgColumns } from './columns.ts';
-import { orgKey } from './keys.ts';
+import { orgKey } from './org-keys.ts';
 
 /** A version never changes: an edit adds a row with the same name and the next version. */
 const typeColumns = () => ({

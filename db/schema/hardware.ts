@@ -2,8 +2,8 @@ import { sql } from 'drizzle-orm';
 import { check, doublePrecision, integer, pgTable, text, unique, uuid } from 'drizzle-orm/pg-core';
 import { moduleTypes } from './catalogue.ts';
 import { projectColumns } from './columns.ts';
-import { circuits } from './wiring.ts';
-import { projectKey, withinOrg, withinProject } from './keys.ts';
+import { withinOrg } from './org-keys.ts';
+import { projectKey, withinProject } from './project-keys.ts';
 
 export const cabinets = pgTable('cabinets', {
   ...projectColumns(),
@@ -35,17 +35,4 @@ export const modules = pgTable('modules', {
   withinOrg('modules_type_fk', t, t.typeId, moduleTypes),
   unique('modules_name_uq').on(t.controllerId, t.name),
   check('modules_ck', sql`${t.baseByte} between 0 and 65535 and ${t.slot} >= 0`),
-]).enableRLS();
-
-export const moduleGroups = pgTable('module_groups', {
-  ...projectColumns(),
-  moduleId: uuid('module_id').notNull(),
-  groupIndex: integer('group_index').notNull(),
-  circuitId: uuid('circuit_id'),
-}, (t) => [
-  ...projectKey('module_groups', t),
-  withinProject('module_groups_module_fk', t, t.moduleId, modules),
-  withinProject('module_groups_circuit_fk', t, t.circuitId, circuits),
-  unique('module_groups_index_uq').on(t.moduleId, t.groupIndex),
-  check('module_groups_ck', sql`${t.groupIndex} >= 0`),
 ]).enableRLS();

@@ -1,6 +1,6 @@
 import { index, integer, jsonb, pgTable, text, timestamp, uuid } from 'drizzle-orm/pg-core';
 import { bytea, createdAt } from './columns.ts';
-import { belowProject } from './keys.ts';
+import { belowProject } from './project-keys.ts';
 
 /** An uploaded file, kept with its hash until the import is undone or expires. */
 export const imports = pgTable('imports', {

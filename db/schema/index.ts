@@ -1,5 +1,6 @@
 export * from './accounts.ts';
 export * from './catalogue.ts';
+export * from './change-sets.ts';
 export * from './hardware.ts';
 export * from './imports.ts';
 export * from './mapping.ts';

@@ -3,7 +3,7 @@ import { check, integer, pgTable, text, unique, uuid } from 'drizzle-orm/pg-core
 import { projectColumns } from './columns.ts';
 import { modules } from './hardware.ts';
 import { dispensers } from './points.ts';
-import { projectKey, withinProject } from './keys.ts';
+import { projectKey, withinProject } from './project-keys.ts';
 
 /** One dispenser a channel, and one channel a dispenser and purpose. */
 export const assignments = pgTable('assignments', {

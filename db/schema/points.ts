@@ -4,7 +4,8 @@ import { dispenserTypes, greases } from './catalogue.ts';
 import { projectColumns, wholeNumber } from './columns.ts';
 import { controllers } from './hardware.ts';
 import { cableNodes, circuits } from './wiring.ts';
-import { projectKey, withinOrg, withinProject } from './keys.ts';
+import { withinOrg } from './org-keys.ts';
+import { projectKey, withinProject } from './project-keys.ts';
 
 export interface BearingFactorsColumn {
   temperature: number;

@@ -2,8 +2,9 @@ import { sql } from 'drizzle-orm';
 import { boolean, check, doublePrecision, integer, pgTable, text, unique, uuid } from 'drizzle-orm/pg-core';
 import { supplyTypes } from './catalogue.ts';
 import { projectColumns } from './columns.ts';
-import { cabinets } from './hardware.ts';
-import { projectKey, withinOrg, withinProject } from './keys.ts';
+import { cabinets, modules } from './hardware.ts';
+import { withinOrg } from './org-keys.ts';
+import { projectKey, withinProject } from './project-keys.ts';
 
 export const supplies = pgTable('supplies', {
   ...projectColumns(),
@@ -54,4 +55,18 @@ export const cableNodes = pgTable('cable_nodes', {
   withinProject('cable_nodes_parent_fk', t, t.parentId, t),
   unique('cable_nodes_location_uq').on(t.circuitId, t.location),
   check('cable_nodes_ck', sql`${t.lengthM} > 0 and ${t.powerMm2} > 0 and ${t.signalMm2} > 0 and ${t.conductorClass} in (2, 5) and ${t.parentId} is distinct from ${t.id}`),
+]).enableRLS();
+
+/** A group of an output module with the circuit that feeds it. */
+export const moduleGroups = pgTable('module_groups', {
+  ...projectColumns(),
+  moduleId: uuid('module_id').notNull(),
+  groupIndex: integer('group_index').notNull(),
+  circuitId: uuid('circuit_id'),
+}, (t) => [
+  ...projectKey('module_groups', t),
+  withinProject('module_groups_module_fk', t, t.moduleId, modules),
+  withinProject('module_groups_circuit_fk', t, t.circuitId, circuits),
+  unique('module_groups_index_uq').on(t.moduleId, t.groupIndex),
+  check('module_groups_ck', sql`${t.groupIndex} >= 0`),
 ]).enableRLS();

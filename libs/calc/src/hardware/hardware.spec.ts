@@ -5,7 +5,8 @@ import {
 import { assess } from '../assess.ts';
 import type { Finding } from '../findings.ts';
 import { channelOfAddress, directAddress, parseAddress } from './address.ts';
-import { deratedA, lowestSupplyV } from './supply-load.ts';
+import { lowestSupplyV } from '../wiring/supply-voltage.ts';
+import { deratedA } from './supply-load.ts';
 
 const twoCore = (count: number) => Array.from({ length: count }, (_, i) => buildLane(`P-${i}`, { typeId: 'type-2', wiring: 'two-core', cableLengthM: 5 }));
 const onFirst = (count: number) => Array.from({ length: count }, (_, i) => buildAssignment(`P-${i}`, 'DO1', i));

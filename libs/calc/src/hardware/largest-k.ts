@@ -1,22 +1,9 @@
 import type { SolvedSupply } from '../wiring/supply-network.ts';
 import { type CircuitVoltages, solveVoltages } from '../wiring/worst-case.ts';
 import { circuitLoads, standingA } from './circuit-load.ts';
-import { failingLanes, faultFinder, TOLERANCE } from './limit-faults.ts';
+import { failingLanes, faultFinder, type LimitTrial, TOLERANCE } from './limit-faults.ts';
 import { type LimitOf, sumLoads, worstSum } from './load-sum.ts';
-import type { RatedSum } from './loads.ts';
 import { supplyLoad } from './supply-load.ts';
-
-/** What a limit k of one circuit is tried against; the other circuits keep theirs. */
-export interface LimitTrial {
-  readonly solved: SolvedSupply;
-  /** Place of the circuit on its supply. */
-  readonly at: number;
-  /** Groups and modules that limit something, by the circuits whose lanes load them. */
-  readonly rated: ReadonlyMap<string, readonly RatedSum[]>;
-  /** Load that the supply may carry before the margin, A. */
-  readonly supplyMayA: number;
-  readonly limitOf: LimitOf;
-}
 
 type Passes = (k: number) => boolean;
 

@@ -1,10 +1,22 @@
 import { motorRunA } from '../wiring/currents.ts';
 import type { CircuitNetwork } from '../wiring/network.ts';
+import type { SolvedSupply } from '../wiring/supply-network.ts';
 import type { CircuitVoltages } from '../wiring/worst-case.ts';
 import { circuitLoads, standingA } from './circuit-load.ts';
-import type { LimitTrial } from './largest-k.ts';
 import { type LimitOf, sumLoads, worstSum } from './load-sum.ts';
 import type { RatedSum } from './loads.ts';
+
+/** What a limit k of one circuit is tried against; the other circuits keep theirs. */
+export interface LimitTrial {
+  readonly solved: SolvedSupply;
+  /** Place of the circuit on its supply. */
+  readonly at: number;
+  /** Groups and modules that limit something, by the circuits whose lanes load them. */
+  readonly rated: ReadonlyMap<string, readonly RatedSum[]>;
+  /** Load that the supply may carry before the margin, A. */
+  readonly supplyMayA: number;
+  readonly limitOf: LimitOf;
+}
 
 /** Tolerance against binary noise, V and A. */
 export const TOLERANCE = 1e-9;

@@ -3,7 +3,7 @@ import type { Assignment, Module, ModuleType } from '../design.ts';
 import { type DesignIndex, groupIndexOf, groupKey, grouped, typeOf, wiringOf } from '../design-index.ts';
 import { NOMINAL_V } from '../wiring/network.ts';
 import { type LimitOf, type Load, type LoadSum, sumLoads, worstSetOf, worstSum } from './load-sum.ts';
-import { HIGHEST_UNSTATED_V, highestSupplyV } from './supply-load.ts';
+import { HIGHEST_UNSTATED_V, highestSupplyV } from '../wiring/supply-voltage.ts';
 
 /** What an output channel carries, A. */
 export interface ChannelLoad {

@@ -1,6 +1,6 @@
 import type { Supply } from '../design.ts';
 import type { DesignIndex } from '../design-index.ts';
-import { lowestSupplyV } from '../hardware/supply-load.ts';
+import { lowestSupplyV } from './supply-voltage.ts';
 import type { CircuitSolution } from './lane-voltages.ts';
 import { buildNetwork, type CircuitNetwork } from './network.ts';
 import { solveVoltages, type SupplyCase } from './worst-case.ts';

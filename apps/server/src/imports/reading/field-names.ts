@@ -1,4 +1,4 @@
-import type { FieldKey } from './fields.ts';
+import type { FieldKey } from './field-keys.ts';
 
 /** Names, written in rows of words with commas between them. */
 function names(...rows: readonly string[]): readonly string[] {

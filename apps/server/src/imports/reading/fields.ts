@@ -1,39 +1,7 @@
+import type { FieldKey } from './field-keys.ts';
 import { FIELD_NAMES } from './field-names.ts';
 
-/** The things that a column can say, by the names that a mapping uses. */
-export type FieldKey =
-  | 'tag'
-  | 'description'
-  | 'function'
-  | 'location'
-  | 'product'
-  | 'machine'
-  | 'boreMm'
-  | 'outsideMm'
-  | 'widthMm'
-  | 'speedRpm'
-  | 'hoursPerDay'
-  | 'daysPerWeek'
-  | 'demandCm3Per100h'
-  | 'demandCm3Per1000h'
-  | 'grease'
-  | 'dispenserType'
-  | 'cartridgeCm3'
-  | 'doseCm3'
-  | 'wiring'
-  | 'controller'
-  | 'outputModule'
-  | 'outputChannel'
-  | 'outputAddress'
-  | 'statusModule'
-  | 'statusChannel'
-  | 'statusAddress'
-  | 'junctionBox'
-  | 'cableTag'
-  | 'cableLengthM'
-  | 'crossSectionMm2'
-  | 'circuit'
-  | 'remarks';
+export type { FieldKey };
 
 /** How a cell of the field is read: `volume` is written in cm³ and kept in whole microlitres. */
 export type FieldKind = 'text' | 'number' | 'volume' | 'choice' | 'module' | 'channel' | 'address';

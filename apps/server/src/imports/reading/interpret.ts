@@ -8,6 +8,7 @@ import { fieldOf } from './fields.ts';
 import { columnIndex, rowNumbered, rowsBelow, type Grid, type GridRow } from './grid.ts';
 import { ImportRefusal } from './import-refusal.ts';
 import type { FieldChange, ImportPlan, ImportSettings, ImportValues, Mapping, PlannedRow, SkipReason } from './plan.ts';
+import { checkValues } from './checks.ts';
 import { RowReading, setSignal, SIGNAL_KEYS, SUBJECTS, type MappedColumn, type ReadingContext } from './row-reading.ts';
 import { skipReason } from './skipped-rows.ts';
 
@@ -111,7 +112,10 @@ function planRows(rows: readonly GridRow[], headings: GridRow, context: ReadingC
 }
 
 function readRow(row: GridRow, headings: GridRow, context: ReadingContext): RowReading {
-  const reading = new RowReading(row, context).read();
+  const reading = new RowReading(row, context);
+  reading.readCells();
+  checkValues(reading, context.index);
+  reading.findChannels();
   if (row.cells.slice(headings.cells.length).some((cell) => cell.trim() !== '')) {
     reading.error(null, {
       code: 'too-many-cells',

@@ -1,7 +1,6 @@
 import type { Controller, Point, Purpose } from '#calc';
 import { resolveSignal, type Channel, type SignalTexts } from './addresses.ts';
 import { unguardText } from './apostrophe-guard.ts';
-import { checkValues } from './checks.ts';
 import { blankValues, type DesignIndex } from './design-index.ts';
 import type { Field, FieldKey } from './fields.ts';
 import { trimmed, type GridRow } from './grid.ts';
@@ -55,15 +54,17 @@ export class RowReading {
     return this.problems.some((each) => each.severity === 'error');
   }
 
-  /** Reads every mapped cell, then checks the values against each other and against the project. */
-  read(): this {
+  /** Reads every mapped cell and finds the point it speaks of. */
+  readCells(): void {
     for (const column of this.context.columns) this.readCell(column);
     this.findPoint();
-    checkValues(this, this.context.index);
+  }
+
+  /** Finds the channels that the checked values ask for. */
+  findChannels(): void {
     this.findController();
     this.resolve('control');
     this.resolve('status');
-    return this;
   }
 
   /** Holds the row back. */

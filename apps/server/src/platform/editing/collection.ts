@@ -1,12 +1,14 @@
-import type { EditableCollection, Resource } from '#contract';
+import type { Resource } from '#contract';
 import type { PgColumn, PgTable } from 'drizzle-orm/pg-core';
 import type { Tx } from '../database.ts';
+import type { CollectionName } from './collection-name.ts';
 import type { Plan } from './plan.ts';
+
+export type { CollectionName };
 
 /** A row in the shape of the contract. */
 export type Row = Readonly<Record<string, unknown>> & { readonly id: string; readonly version: number };
 
-export type CollectionName = EditableCollection | 'projects';
 
 /** A table whose rows people edit; its columns have the names of the contract's fields. */
 export type RowTable = PgTable & { readonly id: PgColumn; readonly orgId: PgColumn; readonly version: PgColumn };

@@ -1,5 +1,5 @@
 import type { RowChange } from '#contract';
-import type { CollectionName } from './collection.ts';
+import type { CollectionName } from './collection-name.ts';
 
 /** A change of the set, or one that follows from it (without a version to check). */
 export interface Planned extends RowChange {

@@ -1,0 +1,3 @@
+import type { EditableCollection } from '#contract';
+
+export type CollectionName = EditableCollection | 'projects';
