@@ -42,36 +42,42 @@ export class HardwareActs {
 
   deleteCabinet(cabinet: Cabinet): void {
     this.delete('cabinets', cabinet.id, cabinet.location, 'The cabinet goes with its description and temperature.', (d) => [
-      count(d.controllers.filter((c) => c.cabinetId === cabinet.id), 'controller'), count(d.supplies.filter((s) => s.cabinetId === cabinet.id), 'supply', 'supplies'),
+      held(d.controllers.filter((c) => c.cabinetId === cabinet.id), 'controller', 'Controllers: delete them under Cabinets and modules.'),
+      held(d.supplies.filter((s) => s.cabinetId === cabinet.id), 'supply', 'Supplies: delete them under Supplies and circuits.', 'supplies'),
     ]);
   }
 
   deleteController(controller: Controller): void {
     this.delete('controllers', controller.id, controller.name, 'The controller goes.', (d) => [
-      count(d.modules.filter((m) => m.controllerId === controller.id), 'module'), count(d.dispensers.filter((x) => x.controllerId === controller.id), 'dispenser'),
+      held(d.modules.filter((m) => m.controllerId === controller.id), 'module', 'Modules: delete them under Cabinets and modules.'),
+      held(d.dispensers.filter((x) => x.controllerId === controller.id), 'dispenser', dispensersTo('another controller')),
     ]);
   }
 
   deleteModule(module: Module): void {
     this.delete('modules', module.id, module.name, 'The module goes, and its groups with the circuits that feed them.', (d) => [
-      count(d.assignments.filter((a) => a.moduleId === module.id), 'mapped channel'),
+      held(d.assignments.filter((a) => a.moduleId === module.id), 'mapped channel', 'Mapped channels: unmap them under I/O mapping.'),
     ]);
   }
 
   deleteSupply(supply: Supply): void {
-    this.delete('supplies', supply.id, supply.name, 'The supply goes with its settings.', (d) => [count(d.circuits.filter((c) => c.supplyId === supply.id), 'circuit')]);
+    this.delete('supplies', supply.id, supply.name, 'The supply goes with its settings.', (d) => [
+      held(d.circuits.filter((c) => c.supplyId === supply.id), 'circuit', 'Circuits: delete them under Supplies and circuits.'),
+    ]);
   }
 
   deleteCircuit(circuit: Circuit): void {
     this.delete('circuits', circuit.id, circuit.name, 'The circuit goes with its protection and its limit k.', (d) => [
-      count(d.cableNodes.filter((n) => n.circuitId === circuit.id), 'box', 'boxes'), count(d.dispensers.filter((x) => x.circuitId === circuit.id), 'dispenser'),
-      count(d.moduleGroups.filter((g) => g.circuitId === circuit.id), 'output group'),
+      held(d.cableNodes.filter((n) => n.circuitId === circuit.id), 'box', 'Boxes: delete them under Cable tree, the last of a trunk first.', 'boxes'),
+      held(d.dispensers.filter((x) => x.circuitId === circuit.id), 'dispenser', dispensersTo('another circuit')),
+      held(d.moduleGroups.filter((g) => g.circuitId === circuit.id), 'output group', 'Output groups: choose another circuit that feeds them under Cabinets and modules.'),
     ]);
   }
 
   deleteBox(node: CableNode): void {
     this.delete('cableNodes', node.id, node.location, `The box goes with its trunk cable ${node.cableTag}.`, (d) => [
-      count(d.cableNodes.filter((n) => n.parentId === node.id), 'box', 'boxes'), count(d.dispensers.filter((x) => x.nodeId === node.id), 'dispenser'),
+      held(d.cableNodes.filter((n) => n.parentId === node.id), 'box', 'Boxes: delete those behind it first, the last of the trunk before the others.', 'boxes'),
+      held(d.dispensers.filter((x) => x.nodeId === node.id), 'dispenser', dispensersTo('another junction box')),
     ]);
   }
 
@@ -86,9 +92,11 @@ export class HardwareActs {
     if (values) await this.project.create(row.collection, values, `${String(values['name'] ?? values['location'])} added`);
   }
 
-  private delete(collection: EditableCollection, id: string, name: string, goes: string, holds: (design: Design) => readonly string[]): void {
+  private delete(collection: EditableCollection, id: string, name: string, goes: string, holds: (design: Design) => readonly Held[]): void {
     const design = this.project.design();
-    if (design) void this.askAndDelete(collection, id, { name, goes, held: holds(design).filter(Boolean).join(', ') });
+    if (!design) return;
+    const still = holds(design).filter(({ rows }) => rows > 0);
+    void this.askAndDelete(collection, id, { name, goes, held: still.map(({ words }) => words).join(', '), how: still.map(({ how }) => how) });
   }
 
   private async askAndDelete(collection: EditableCollection, id: string, deletion: Deletion): Promise<void> {
@@ -97,5 +105,15 @@ export class HardwareActs {
   }
 }
 
-const count = (rows: readonly unknown[], one: string, many = `${one}s`): string =>
-  rows.length === 0 ? '' : `${rows.length} ${rows.length === 1 ? one : many}`;
+/** Rows that stand on the one to be deleted, and what is to be done with them first. */
+interface Held {
+  readonly rows: number;
+  /** `2 controllers` */
+  readonly words: string;
+  readonly how: string;
+}
+
+const held = ({ length }: readonly unknown[], one: string, how: string, many = `${one}s`): Held =>
+  ({ rows: length, words: `${length} ${length === 1 ? one : many}`, how });
+
+const dispensersTo = (place: string): string => `Dispensers: choose ${place} under Points and doses, beside the table, or delete their points.`;

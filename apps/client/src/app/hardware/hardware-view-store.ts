@@ -1,9 +1,9 @@
 import { computed, inject, Injectable } from '@angular/core';
 import type { Finding } from '#calc';
 import { ProjectStore } from '../core/project/project-store';
+import type { Choice } from '../shared/fields/choice';
 import { type Mend, mendOf } from '../shared/findings/finding-mend';
 import { by, cabinetViews } from './cabinet-views';
-import type { Choice } from './fields/save-select';
 import { supplyViews, treeViews } from './supply-views';
 
 /** What the hardware screen shows; the rows themselves belong to the project store. */
@@ -22,8 +22,6 @@ export class HardwareViewStore {
   readonly trees = computed(() => this.from(({ design }) => treeViews(design)));
   readonly circuitChoices = computed(() => this.from(({ design }) =>
     [...design.circuits].sort(by((c) => c.name)).map((c): Choice<string> => ({ value: c.id, label: c.name }))));
-  readonly supplyTypeChoices = computed(() => this.from(({ design }) =>
-    design.supplyTypes.map((t): Choice<string> => ({ value: t.id, label: t.typeVersion > 1 ? `${t.name}, version ${t.typeVersion}` : t.name }))));
 
   private readonly findings = computed<ReadonlyMap<string, readonly Finding[]>>(() =>
     bySubject(this.state()?.assessment.findings ?? []));

@@ -2,7 +2,6 @@ import { describe, expect, it } from 'vitest';
 import type { CableNode, Design } from '#calc';
 import { treeRows } from './cable-tree';
 import { nextFreeByte, nextName, nextSlot } from './rack';
-import { numberOrNone, numberWithin, timeZoneOf } from './typed';
 
 const design = {
   moduleTypes: [
@@ -47,27 +46,5 @@ describe('the cable tree', () => {
   it('shows every box once, also those in a loop or behind a box of another circuit', () => {
     const rows = treeRows([box('+A', '+B'), box('+B', '+A'), box('+C', 'elsewhere')]);
     expect(rows.map((r) => r.node.location).sort()).toEqual(['+A', '+B', '+C']);
-  });
-});
-
-describe('what is typed', () => {
-  it('is a number with point or comma, with or without its unit', () => {
-    const read = numberWithin({ min: 0, max: 10 });
-    expect(read(' 1,5 mm² ')).toEqual({ ok: true, value: 1.5 });
-    expect(read('24.5 V').ok).toBe(false);
-    expect(read('')).toEqual({ ok: false, reason: 'Enter a number.' });
-    expect(read('abc')).toEqual({ ok: false, reason: '“abc” is not a number.' });
-  });
-
-  it('keeps to its bounds', () => {
-    expect(numberWithin({ min: 0, max: 5, above: true })('0')).toEqual({ ok: false, reason: 'Enter more than 0 and at most 5.' });
-    expect(numberWithin({ min: -40, max: 90 })('-50')).toEqual({ ok: false, reason: 'Enter −40 to 90.' });
-    expect(numberOrNone({ min: 1, max: 9, whole: true })('2.5')).toEqual({ ok: false, reason: 'Enter a whole number.' });
-    expect(numberOrNone({ min: 1, max: 9 })(' ')).toEqual({ ok: true, value: null });
-  });
-
-  it('names a time zone that exists', () => {
-    expect(timeZoneOf('Europe/Amsterdam').ok).toBe(true);
-    expect(timeZoneOf('Nowhere/Town').ok).toBe(false);
   });
 });

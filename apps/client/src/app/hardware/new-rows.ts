@@ -1,9 +1,9 @@
 import type { Cabinet, CableNode, Circuit, Controller, Design, ModuleType, Supply } from '#calc';
+import { nameOf, type Read, type Typed } from '../shared/fields/typed';
+import { typeChoices } from '../shared/fields/type-choices';
 import { choiceField, type NewField, type NewRow, type Values } from './add-row/new-row';
-import { PROTECTIONS, READ, sectionsWith } from './fields/readers';
-import type { Choice } from './fields/save-select';
 import { nextFreeByte, nextName, nextSlot } from './rack';
-import { nameOf, type Read, type Typed } from './typed';
+import { PROTECTIONS, READ, sectionsWith } from './readers';
 
 export function newCabinet(design: Design): NewRow {
   const taken = design.cabinets.map((c) => c.location);
@@ -37,7 +37,7 @@ export function newModule(design: Design, controller: Controller): NewRow {
     collection: 'modules', title: `Add a module to ${controller.name}`,
     fixed: { controllerId: controller.id, slot: nextSlot(design.modules, controller.id) },
     fields: [
-      choiceField('typeId', 'Type', latest(design.moduleTypes)),
+      choiceField('typeId', 'Type', typeChoices(design.moduleTypes)),
       { ...name('name', 'Name', own.map((m) => m.name), ''), suggest: ofType((type) => nextName(namesLike(type), FIRST_NAME[type.technology])) },
       { field: 'baseByte', label: 'Base byte', read: READ.baseByte, suggest: ofType((type) => String(nextFreeByte(design, controller.id, type.kind))) },
     ],
@@ -51,7 +51,7 @@ export function newSupply(design: Design): NewRow {
     collection: 'supplies', title: 'Add a supply', fixed: {},
     fields: [
       choiceField('cabinetId', 'Cabinet', design.cabinets.map((c) => ({ value: c.id, label: c.location }))),
-      choiceField('typeId', 'Type', latest(design.supplyTypes)),
+      choiceField('typeId', 'Type', typeChoices(design.supplyTypes)),
       text('name', 'Name', nextName(design.supplies.map((s) => s.name), '-T1'), READ.name),
       text('setV', 'Voltage set', '24', READ.setV, 'V'),
       text('internalOhm', 'Resistance up to the terminals', '0', READ.ohm, 'Ω'),
@@ -105,11 +105,4 @@ function section(field: string, label: string, first: number): NewField {
   const choices = sectionsWith(first).map(({ value, label: shown }) => ({ value: String(value), label: shown }));
   const chosen = choiceField(field, label, choices, String(first));
   return { ...chosen, read: (typed) => { const answer = chosen.read(typed); return answer.ok ? { ok: true, value: Number(answer.value) } : answer; } };
-}
-
-/** The latest version of each type, by name. */
-function latest(types: readonly { readonly id: string; readonly name: string; readonly typeVersion: number }[]): readonly Choice<string>[] {
-  const versions = new Map<string, (typeof types)[number]>();
-  for (const type of types) if ((versions.get(type.name)?.typeVersion ?? 0) < type.typeVersion) versions.set(type.name, type);
-  return [...versions.values()].sort((a, b) => a.name.localeCompare(b.name, 'en', { numeric: true })).map(({ id, name: label }) => ({ value: id, label }));
 }

@@ -1,4 +1,6 @@
 import type { Assessment, Circuit, CircuitFigures, Design, Supply, SupplyFigures, SupplyType } from '#calc';
+import type { Choice } from '../shared/fields/choice';
+import { typeChoices } from '../shared/fields/type-choices';
 import { by } from './cabinet-views';
 import { treeRows, type TreeRow } from './cable-tree';
 
@@ -13,6 +15,8 @@ export interface CircuitView {
 export interface SupplyView {
   readonly supply: Supply;
   readonly type: SupplyType | null;
+  /** Types that it may become, its own among them. */
+  readonly typeChoices: readonly Choice<string>[];
   readonly cabinet: string;
   readonly figures: SupplyFigures | null;
   readonly circuits: readonly CircuitView[];
@@ -39,6 +43,7 @@ export function supplyViews(design: Design, assessment: Assessment): readonly Su
   return suppliesInOrder(design).map(({ supply, cabinet }) => ({
     supply, cabinet,
     type: design.supplyTypes.find((type) => type.id === supply.typeId) ?? null,
+    typeChoices: typeChoices(design.supplyTypes, supply.typeId),
     figures: assessment.supplies.get(supply.id) ?? null,
     circuits: circuitsOf(design, supply).map((circuit) => {
       const figures = assessment.circuits.get(circuit.id) ?? null;

@@ -1,9 +1,9 @@
 import type { BearingFactors, DispenserType } from '#calc';
+import { positive, type Typed } from '../shared/fields/typed';
 import type { RowEdit } from './cell-values';
 import { cartridgeOf, doseOf } from './cell-values';
 import type { CellEdits } from './grid-changes';
 import type { PointRow } from './point-rows';
-import { positive, type Typed } from './typed-values';
 
 /** What is put on all chosen points; a blank text or null leaves the field as it is. */
 export interface BulkValues {

@@ -1,7 +1,7 @@
 import { demandFigure, type DemandUnit, formatCount, formatInterval, formatNumber, formatVolume, NOTHING, volumeFigure } from '#calc';
+import { accepted, numberText, positive, refused, type Typed, volumeText, volumeUl, words } from '../shared/fields/typed';
 import type { ColumnId } from './grid-columns';
 import type { PointRow } from './point-rows';
-import { accepted, editable, editableVolume, positive, refused, type Typed, volumeUl, words } from './typed-values';
 
 /** New values of one row of the design. */
 export interface RowEdit {
@@ -44,17 +44,17 @@ export function cellInput(column: ColumnId, row: PointRow, demandPer: DemandUnit
   switch (column) {
     case 'tag': return point.tag;
     case 'description': return point.description ?? '';
-    case 'hoursPerDay': return editable(point.hoursPerDay);
-    case 'doseUl': return editableVolume(dispenser?.doseUl ?? null);
-    case 'cartridgeUl': return editableVolume(dispenser?.cartridgeUl ?? null);
-    case 'demand': return point.demandWay === 'stated' && point.statedPer === demandPer ? editableVolume(point.statedUl) : shownDemand(row, demandPer);
+    case 'hoursPerDay': return numberText(point.hoursPerDay);
+    case 'doseUl': return volumeText(dispenser?.doseUl ?? null);
+    case 'cartridgeUl': return volumeText(dispenser?.cartridgeUl ?? null);
+    case 'demand': return point.demandWay === 'stated' && point.statedPer === demandPer ? volumeText(point.statedUl) : shownDemand(row, demandPer);
     default: return '';
   }
 }
 
 /** The values that a cell offers: the cartridges of the dispenser's type. */
 export function cellChoices(column: ColumnId, row: PointRow): readonly string[] {
-  return column === 'cartridgeUl' ? (row.type?.cartridgesUl ?? []).map(editableVolume) : [];
+  return column === 'cartridgeUl' ? (row.type?.cartridgesUl ?? []).map(volumeText) : [];
 }
 
 /** Reads what was typed into a cell: the edit that it asks for, or the reason why it cannot be. */

@@ -1,13 +1,13 @@
 import { inject, Injectable } from '@angular/core';
 import { v7 as newId } from 'uuid';
 import { ProjectStore } from '../core/project/project-store';
+import { volumeText } from '../shared/fields/typed';
 import { bulkEdits, NO_BULK_VALUES } from './bulk-changes';
 import { cellInput, cellText, type RowEdit, typedCell } from './cell-values';
 import { type CellEdits, changesOf, clearEdits, fillEdits, pasteEdits, refusalText } from './grid-changes';
 import { type ColumnId, COLUMNS, columnAt } from './grid-columns';
 import type { PointRow } from './point-rows';
 import { PointsViewStore } from './points-view-store';
-import { editableVolume } from './typed-values';
 
 /** What a new point starts with. */
 export interface NewPoint {
@@ -88,7 +88,7 @@ export class PointEdits {
 
   /** A dose and cartridge for one point or several; with one whose type cannot give it for none. */
   setDose(rows: readonly PointRow[], cartridgeUl: number, doseUl: number): void {
-    const { edits, refusals } = bulkEdits(rows, { ...NO_BULK_VALUES, dose: editableVolume(doseUl), cartridge: editableVolume(cartridgeUl) });
+    const { edits, refusals } = bulkEdits(rows, { ...NO_BULK_VALUES, dose: volumeText(doseUl), cartridge: volumeText(cartridgeUl) });
     const pulsed = edits.map((edit): RowEdit => ({ ...edit, values: { ...edit.values, method: 'pulse' } }));
     const whose = rows.length === 1 ? rows[0].point.tag : counted(rows.length, 'point');
     this.several({ edits: pulsed, refusals }, 'changed', `Dose and cartridge of ${whose}`);

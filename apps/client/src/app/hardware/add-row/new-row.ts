@@ -1,6 +1,6 @@
 import type { EditableCollection } from '#contract';
-import type { Choice } from '../fields/save-select';
-import type { Read } from '../typed';
+import type { Choice } from '../../shared/fields/choice';
+import type { Read } from '../../shared/fields/typed';
 
 export type Values = Readonly<Record<string, string>>;
 

@@ -2,15 +2,16 @@ import { ChangeDetectionStrategy, Component, inject } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { ampsAgainstMaximum, formatAmps, type LoadFigures, NOTHING } from '#calc';
 import { LoadBar } from '../../shared/figure/load-bar';
+import { SaveField } from '../../shared/fields/save-field';
+import { SaveSelect } from '../../shared/fields/save-select';
+import { numberText } from '../../shared/fields/typed';
 import { Icon } from '../../shared/icon/icon';
 import { EmptyState } from '../../shared/states/empty-state';
 import type { ModuleView } from '../cabinet-views';
-import { READ, typed } from '../fields/readers';
-import { SaveField } from '../fields/save-field';
-import { SaveSelect } from '../fields/save-select';
 import { FoundList } from '../found-list/found-list';
 import { HardwareActs } from '../hardware-acts';
 import { HardwareViewStore } from '../hardware-view-store';
+import { READ } from '../readers';
 
 /** Cabinets with their controllers; their modules in rack order with addresses, loads and the circuits that feed their groups. */
 @Component({
@@ -24,7 +25,7 @@ export class CabinetsSection {
   protected readonly view = inject(HardwareViewStore);
   protected readonly acts = inject(HardwareActs);
   protected readonly read = READ;
-  protected readonly typed = typed;
+  protected readonly typed = numberText;
   protected readonly nothing = NOTHING;
 
   /** Only outputs carry a load. */

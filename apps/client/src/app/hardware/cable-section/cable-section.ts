@@ -2,14 +2,15 @@ import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/c
 import { MatButton } from '@angular/material/button';
 import { formatMetres } from '#calc';
 import { Caution, type CautionItem } from '../../shared/caution/caution';
+import { SaveField } from '../../shared/fields/save-field';
+import { SaveSelect } from '../../shared/fields/save-select';
+import { numberText } from '../../shared/fields/typed';
 import { Icon } from '../../shared/icon/icon';
 import { EmptyState } from '../../shared/states/empty-state';
-import { CONDUCTOR_CLASSES, READ, sectionsWith, typed } from '../fields/readers';
-import { SaveField } from '../fields/save-field';
-import { SaveSelect } from '../fields/save-select';
 import { FoundList } from '../found-list/found-list';
 import { HardwareActs } from '../hardware-acts';
 import { HardwareViewStore } from '../hardware-view-store';
+import { CONDUCTOR_CLASSES, READ, sectionsWith } from '../readers';
 import { HungList } from './hung-list';
 
 /** The cable tree of each circuit: from the cabinet's terminals to the boxes, with the dispensers that hang on each. */
@@ -25,7 +26,7 @@ export class CableSection {
   protected readonly acts = inject(HardwareActs);
   protected readonly projectId = computed(() => this.view.policies()?.id ?? '');
   protected readonly read = READ;
-  protected readonly typed = typed;
+  protected readonly typed = numberText;
   protected readonly sections = sectionsWith;
   protected readonly classes = CONDUCTOR_CLASSES;
   protected readonly metres = formatMetres;

@@ -12,14 +12,15 @@ async function buttons(data: Deletion): Promise<{ readonly text: string; readonl
 
 describe('ConfirmDelete', () => {
   it('says what goes and offers to delete', async () => {
-    const { text, names } = await buttons({ name: '-KF4', goes: 'The module goes.', held: '' });
+    const { text, names } = await buttons({ name: '-KF4', goes: 'The module goes.', held: '', how: [] });
     expect(text).toContain('The module goes. This cannot be undone.');
     expect(names).toEqual(['Keep', 'Delete']);
   });
 
   it('says what has to go first and offers no deletion', async () => {
-    const { text, names } = await buttons({ name: 'C1', goes: 'The circuit goes.', held: '2 boxes, 30 dispensers' });
+    const { text, names } = await buttons({ name: 'C1', goes: 'The circuit goes.', held: '2 boxes, 30 dispensers', how: ['Boxes: delete them under Cable tree.'] });
     expect(text).toContain('Still on it: 2 boxes, 30 dispensers. Move or delete these first.');
+    expect(text).toContain('Boxes: delete them under Cable tree.');
     expect(names).toEqual(['Close']);
   });
 });

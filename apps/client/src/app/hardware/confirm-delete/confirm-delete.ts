@@ -8,6 +8,8 @@ export interface Deletion {
   readonly goes: string;
   /** What still stands on it, `2 controllers, 1 supply`; empty: nothing. */
   readonly held: string;
+  /** Where each of these is moved or deleted, a sentence each. */
+  readonly how: readonly string[];
 }
 
 /** Names what goes before it goes, or what has to go first. Answers true to delete. */
@@ -19,7 +21,10 @@ export interface Deletion {
   template: `
     @if (data.held) {
       <h2 matDialogTitle>{{ data.name }} cannot be deleted yet</h2>
-      <mat-dialog-content><p>Still on it: {{ data.held }}. Move or delete these first.</p></mat-dialog-content>
+      <mat-dialog-content>
+        <p>Still on it: {{ data.held }}. Move or delete these first.</p>
+        @for (step of data.how; track step) { <p class="small">{{ step }}</p> }
+      </mat-dialog-content>
       <mat-dialog-actions align="end"><button matButton="filled" type="button" [mat-dialog-close]="false">Close</button></mat-dialog-actions>
     } @else {
       <h2 matDialogTitle>Delete {{ data.name }}?</h2>

@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, inject } from '@angular/core';
-import { SaveField } from '../fields/save-field';
+import { SaveField } from '../../shared/fields/save-field';
 import { FoundList } from '../found-list/found-list';
 import { HardwareViewStore } from '../hardware-view-store';
 import { POLICIES, type Policy } from './policies';
@@ -18,7 +18,7 @@ import { POLICIES, type Policy } from './policies';
           <header class="band"><h2>{{ part.title }}</h2></header>
           @for (policy of part.policies; track policy.field) {
             <div class="policy">
-              <lw-save-field [label]="policy.label" [unit]="policy.unit" [number]="policy.unit !== ''" [blank]="policy.blank ?? ''" [value]="policy.text(project)" [read]="policy.read"
+              <lw-save-field [label]="policy.label" [unit]="policy.unit" [blank]="policy.blank ?? ''" [value]="policy.text(project)" [read]="policy.read"
                 [editable]="view.canEdit()" (saved)="save(project.id, policy, $event)" />
               <p class="small">{{ policy.does }} <span class="quiet">{{ policy.source }}.</span></p>
             </div>

@@ -1,5 +1,5 @@
 import type { Project } from '#calc';
-import { numberOrNone, numberWithin, type Read, timeZoneOf } from '../typed';
+import { numberOrNone, numberWithin, type Read, timeZoneOf } from '../../shared/fields/typed';
 
 /** A policy of the project: how it is typed, what it does, and where it comes from. */
 export interface Policy {

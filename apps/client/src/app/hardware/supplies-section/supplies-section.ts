@@ -4,14 +4,15 @@ import { MatCheckbox } from '@angular/material/checkbox';
 import { ampsAgainstMaximum, ampsAgainstMinimum, type CircuitFigures, formatAmps, NOTHING, type SupplyFigures, voltsAgainstMinimum } from '#calc';
 import { Figure } from '../../shared/figure/figure';
 import { LoadBar } from '../../shared/figure/load-bar';
+import { SaveField } from '../../shared/fields/save-field';
+import { SaveSelect } from '../../shared/fields/save-select';
+import { numberText } from '../../shared/fields/typed';
 import { Icon } from '../../shared/icon/icon';
 import { EmptyState } from '../../shared/states/empty-state';
-import { PROTECTIONS, READ, typed } from '../fields/readers';
-import { SaveField } from '../fields/save-field';
-import { SaveSelect } from '../fields/save-select';
 import { FoundList } from '../found-list/found-list';
 import { HardwareActs } from '../hardware-acts';
 import { HardwareViewStore } from '../hardware-view-store';
+import { PROTECTIONS, READ } from '../readers';
 
 interface Line {
   readonly name: string;
@@ -31,7 +32,7 @@ export class SuppliesSection {
   protected readonly view = inject(HardwareViewStore);
   protected readonly acts = inject(HardwareActs);
   protected readonly read = READ;
-  protected readonly typed = typed;
+  protected readonly typed = numberText;
   protected readonly protections = PROTECTIONS;
   protected readonly upTo = ampsAgainstMaximum;
   protected readonly atLeast = ampsAgainstMinimum;

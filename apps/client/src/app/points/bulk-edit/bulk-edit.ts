@@ -7,6 +7,7 @@ import { MatFormField, MatSuffix } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
 import { MatOption, MatSelect } from '@angular/material/select';
 import type { BearingFactors, DispenserType, Grease } from '#calc';
+import { typeChoices } from '../../shared/fields/type-choices';
 import { FindingMark } from '../../shared/findings/finding-mark';
 import { bulkEdits } from '../bulk-changes';
 import { FACTOR_STEPS } from '../factor-steps';
@@ -35,6 +36,7 @@ export class BulkEdit {
     typeId: '', dose: '', cartridge: '', hours: '', greaseId: '',
     factors: this.forms.group({ temperature: 0, contamination: 0, moisture: 0, vibration: 0, position: 0, design: 0 }),
   });
+  protected readonly types = typeChoices(this.data.types);
   protected readonly factors = FACTOR_STEPS;
   protected readonly refusal = signal<string | null>(null);
   private readonly values = toSignal(this.form.valueChanges, { initialValue: null });

@@ -1,13 +1,14 @@
 import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
 import { DEMAND_UNITS, demandFigure, type DemandUnit, type DemandWay, type Grease, type Point, type StatedPer, withUnit } from '#calc';
 import { Segmented } from '../../shared/controls/segmented';
+import type { Choice } from '../../shared/fields/choice';
+import { SaveField } from '../../shared/fields/save-field';
+import { SaveSelect } from '../../shared/fields/save-select';
+import { numberText, positive, type Read, refused, type Typed, volumeText, volumeUl } from '../../shared/fields/typed';
 import { Figure } from '../../shared/figure/figure';
 import { FindingMark } from '../../shared/findings/finding-mark';
 import { FACTOR_STEPS, stepsWith } from '../factor-steps';
-import { PanelField } from '../panel-field/panel-field';
-import { type Choice, PanelSelect } from '../panel-field/panel-select';
 import type { PointRow } from '../point-rows';
-import { editable, editableVolume, positive, type Typed, volumeUl } from '../typed-values';
 
 type NumberField = 'boreMm' | 'outsideMm' | 'widthMm' | 'speedRpm' | 'practiceStrokes' | 'practiceGramsPerStroke' | 'practiceEveryDays' | 'hoursPerDay';
 
@@ -15,7 +16,7 @@ interface NumberInput {
   readonly field: NumberField;
   readonly label: string;
   readonly unit: string;
-  readonly read: (text: string) => Typed<number | null>;
+  readonly read: Read<number | null>;
 }
 
 const number = (field: NumberField, label: string, unit: string, max: number): NumberInput =>
@@ -29,7 +30,7 @@ const STATED_PER: readonly Choice<StatedPer>[] = [
 /** How a point's demand is known, with the inputs of that way; each field saves by itself. */
 @Component({
   selector: 'lw-demand-form',
-  imports: [Figure, FindingMark, PanelField, PanelSelect, Segmented],
+  imports: [Figure, FindingMark, SaveField, SaveSelect, Segmented],
   changeDetection: ChangeDetectionStrategy.OnPush,
   styleUrl: '../side-panel/panel-form.css',
   templateUrl: './demand-form.html',
@@ -55,9 +56,9 @@ export class DemandForm {
   protected readonly statedPer = STATED_PER;
   protected readonly factors = FACTOR_STEPS;
   protected readonly stepsWith = stepsWith;
-  protected readonly text = editable;
-  protected readonly volumeText = editableVolume;
-  protected readonly readVolume = (text: string): Typed<number | null> => volumeUl(text, 1e10);
+  protected readonly text = numberText;
+  protected readonly volumeText = volumeText;
+  protected readonly readVolume: Read<number | null> = (text) => volumeUl(text, 1e10);
 
   protected readonly point = computed(() => this.row().point);
   protected readonly needsGrease = computed(() => this.point().demandWay !== 'stated');
@@ -81,8 +82,8 @@ export class DemandForm {
   }
 
   /** Days of a week cannot be left undecided. */
-  protected readonly readDays = (text: string): Typed<number> => {
+  protected readonly readDays: Read<number> = (text) => {
     const typed = positive(text, 7, 'd');
-    return typed.ok && typed.value === null ? { ok: false, reason: 'Enter the days of a week on which it runs.' } : (typed as Typed<number>);
+    return typed.ok && typed.value === null ? refused('Enter the days of a week on which it runs.') : (typed as Typed<number>);
   };
 }

@@ -1,10 +1,12 @@
 import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { type ConductorClass, type Design, type DischargeMethod, type Dispenser, formatSection, NOTHING, type Point, STANDARD_SECTIONS_MM2, type Zone } from '#calc';
-import { PanelField } from '../panel-field/panel-field';
-import { type Choice, PanelSelect } from '../panel-field/panel-select';
+import type { Choice } from '../../shared/fields/choice';
+import { SaveField } from '../../shared/fields/save-field';
+import { SaveSelect } from '../../shared/fields/save-select';
+import { typeChoices } from '../../shared/fields/type-choices';
+import { numberText, positive, type Read, words } from '../../shared/fields/typed';
 import type { PointRow } from '../point-rows';
-import { editable, positive, type Typed, words } from '../typed-values';
 
 type PointText = 'machine' | 'function' | 'location' | 'product';
 
@@ -17,7 +19,7 @@ const ZONES: readonly Choice<Zone>[] = [
 /** The dispenser at a point: type, discharge, where it belongs, its own cable, and the place it stands in. */
 @Component({
   selector: 'lw-dispenser-form',
-  imports: [MatButton, PanelField, PanelSelect],
+  imports: [MatButton, SaveField, SaveSelect],
   changeDetection: ChangeDetectionStrategy.OnPush,
   styleUrl: '../side-panel/panel-form.css',
   templateUrl: './dispenser-form.html',
@@ -38,12 +40,12 @@ export class DispenserForm {
     { field: 'location', label: 'Location designation' }, { field: 'product', label: 'Product designation' },
   ];
   protected readonly nothing = NOTHING;
-  protected readonly text = editable;
-  protected readonly readMetres = (text: string): Typed<number | null> => positive(text, 10_000, 'm');
-  protected readonly readText = (text: string): Typed<string | null> => words(text, 200);
-  protected readonly readRemarks = (text: string): Typed<string | null> => words(text, 4000);
+  protected readonly text = numberText;
+  protected readonly readMetres: Read<number | null> = (text) => positive(text, 10_000, 'm');
+  protected readonly readText: Read<string | null> = (text) => words(text, 200);
+  protected readonly readRemarks: Read<string | null> = (text) => words(text, 4000);
 
-  protected readonly types = computed(() => this.design().dispenserTypes.map((type): Choice<string> => ({ value: type.id, label: type.name })));
+  protected readonly types = computed(() => typeChoices(this.design().dispenserTypes, this.row().dispenser?.typeId));
   protected readonly methods = computed((): readonly Choice<DischargeMethod>[] =>
     [{ value: 'pulse', label: 'by pulse' }, ...(this.row().type?.timedMonths.length || this.row().dispenser?.method === 'timed' ? [{ value: 'timed' as const, label: 'timed, on its own clock' }] : [])]);
   protected readonly periods = computed(() => (this.row().type?.timedMonths ?? []).map((months): Choice<number> => ({ value: months, label: `${months} ${months === 1 ? 'month' : 'months'}` })));

@@ -6,6 +6,7 @@ import { MatFormField } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
 import { MatOption, MatSelect } from '@angular/material/select';
 import type { DispenserType } from '#calc';
+import { typeChoices } from '../../shared/fields/type-choices';
 import { FindingMark } from '../../shared/findings/finding-mark';
 import type { NewPoint } from '../point-edits';
 
@@ -31,6 +32,7 @@ export class NewPointDialog {
   protected readonly form = inject(NonNullableFormBuilder).group({
     tag: '', description: '', function: this.data.function ?? '', machine: this.data.machine ?? '', typeId: '',
   });
+  protected readonly types = typeChoices(this.data.types);
   protected readonly refusal = signal<string | null>(null);
 
   protected create(): void {

@@ -1,10 +1,10 @@
 import { TestBed } from '@angular/core/testing';
-import { READ } from './readers';
 import { SaveField } from './save-field';
+import { numberWithin, textOf } from './typed';
 
 async function field(editable = true) {
   const fixture = TestBed.createComponent(SaveField<number>);
-  const inputs = { label: 'Base byte of -KF4', value: '4', read: READ.baseByte, editable, cell: true, number: true };
+  const inputs = { label: 'Base byte of -KF4', value: '4', read: numberWithin({ min: 0, max: 65_535, whole: true }), editable, cell: true, number: true };
   for (const [name, value] of Object.entries(inputs)) fixture.componentRef.setInput(name, value);
   const saved: number[] = [];
   fixture.componentInstance.saved.subscribe((value) => saved.push(value));
@@ -46,6 +46,24 @@ describe('SaveField', () => {
     expect(host.querySelector('input')?.value).toBe('4');
     expect(host.querySelector('[role=alert]')).toBeNull();
     expect(saved).toEqual([]);
+  });
+
+  it('is a box of several lines that is left to save', async () => {
+    const fixture = TestBed.createComponent(SaveField<string>);
+    const inputs = { label: 'Remarks', value: '', read: textOf(20), editable: true, rows: 3 };
+    for (const [name, value] of Object.entries(inputs)) fixture.componentRef.setInput(name, value);
+    const saved: string[] = [];
+    fixture.componentInstance.saved.subscribe((value) => saved.push(value));
+    await fixture.whenStable();
+    const host = fixture.nativeElement as HTMLElement;
+    const box = host.querySelector('textarea')!;
+    expect(host.querySelector('label')?.htmlFor).toBe(box.id);
+    box.value = 'two\nlines';
+    box.dispatchEvent(new Event('input'));
+    box.dispatchEvent(key('Enter'));
+    expect(saved).toEqual([]);
+    box.dispatchEvent(new Event('blur'));
+    expect(saved).toEqual(['two\nlines']);
   });
 
   it('shows only the value to those who may not edit', async () => {

@@ -1,9 +1,9 @@
-import { ChangeDetectionStrategy, Component, effect, inject, input, output, signal, untracked } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, effect, inject, input, output, signal, untracked } from '@angular/core';
 import { NonNullableFormBuilder, ReactiveFormsModule } from '@angular/forms';
 import { MatFormField, MatSuffix } from '@angular/material/form-field';
 import { MatInput } from '@angular/material/input';
 import { NOTHING } from '#calc';
-import type { Read } from '../typed';
+import type { Read } from './typed';
 
 let next = 0;
 
@@ -21,9 +21,14 @@ let next = 0;
     @if (editable()) {
       @if (!cell()) { <label [for]="id">{{ label() }}</label> }
       <mat-form-field>
-        <input matInput [id]="id" [formControl]="control" autocomplete="off" spellcheck="false" [class.num]="number()" [class.code]="code()"
-          [attr.aria-label]="cell() ? label() : null" [attr.aria-invalid]="reason() !== null" [attr.aria-describedby]="reason() ? id + '-why' : null"
-          (blur)="save()" (keydown.enter)="save()" (keydown.escape)="restore($event)">
+        @if (rows() > 1) {
+          <textarea matInput [id]="id" [rows]="rows()" [formControl]="control"
+            [attr.aria-label]="spoken()" [attr.aria-invalid]="reason() !== null" [attr.aria-describedby]="reason() ? id + '-why' : null" (blur)="save()"></textarea>
+        } @else {
+          <input matInput [id]="id" [formControl]="control" autocomplete="off" spellcheck="false" [class.num]="figures()" [class.code]="code()"
+            [attr.aria-label]="spoken()" [attr.aria-invalid]="reason() !== null" [attr.aria-describedby]="reason() ? id + '-why' : null"
+            (blur)="save()" (keydown.enter)="save()" (keydown.escape)="restore($event)">
+        }
         @if (unit()) { <span matSuffix class="unit">{{ unit() }}</span> }
       </mat-form-field>
       @if (reason(); as why) { <p class="why" role="alert" [id]="id + '-why'">{{ why }}</p> }
@@ -40,17 +45,22 @@ export class SaveField<T> {
   readonly editable = input.required<boolean>();
   readonly unit = input('');
   readonly cell = input(false);
-  /** Figures stand right. */
+  /** A number without a unit. */
   readonly number = input(false);
   /** A designation. */
   readonly code = input(false);
+  /** Lines of text; Enter begins a new one. */
+  readonly rows = input(1);
   /** What stands for blank where nothing can be typed. */
   readonly blank = input(NOTHING);
   readonly saved = output<T>();
 
-  protected readonly id = `hardware-field-${(next += 1)}`;
+  protected readonly id = `save-field-${(next += 1)}`;
   protected readonly control = inject(NonNullableFormBuilder).control('');
   protected readonly reason = signal<string | null>(null);
+  /** Figures stand right. */
+  protected readonly figures = computed(() => this.number() || this.unit() !== '');
+  protected readonly spoken = computed(() => (this.cell() ? this.label() : null));
 
   constructor() {
     effect(() => {

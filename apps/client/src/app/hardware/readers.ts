@@ -1,6 +1,6 @@
 import { STANDARD_SECTIONS_MM2 } from '#calc';
-import { nameOf, numberOrNone, numberWithin, textOf } from '../typed';
-import type { Choice } from './save-select';
+import type { Choice } from '../shared/fields/choice';
+import { nameOf, numberOrNone, numberWithin, textOf } from '../shared/fields/typed';
 
 /** How the fields of hardware rows are read; the bounds are those of the API. */
 export const READ = {
@@ -28,6 +28,3 @@ const SECTIONS: readonly Choice<number>[] = STANDARD_SECTIONS_MM2.map((mm2) => (
 /** The standard cross-sections, and the one that a row has where it is none of them. */
 export const sectionsWith = (mm2: number): readonly Choice<number>[] =>
   STANDARD_SECTIONS_MM2.includes(mm2) ? SECTIONS : [...SECTIONS, { value: mm2, label: String(mm2) }];
-
-/** A number as a field shows it for editing. */
-export const typed = (value: number | null): string => (value === null ? '' : String(value));
