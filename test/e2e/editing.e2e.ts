@@ -1,14 +1,10 @@
 import { expect, test } from '@playwright/test';
-import { designOf, freshProject, signIn, tagList } from './support.ts';
+import { designOf, freshProject, importList, signIn } from './support.ts';
 
 test('two people change the same field: both values are shown, and the choice is kept', async ({ page, browser }) => {
   await signIn(page, 'engineer');
   const project = await freshProject(page, 'Conflict');
-  const upload = await page.request.post(`/api/v1/projects/${project}/imports`, {
-    multipart: { file: { name: 'points.csv', mimeType: 'text/csv', buffer: await (await import('node:fs/promises')).readFile(tagList('brackwater-points.csv')) } },
-  });
-  const { id } = (await upload.json()) as { id: string };
-  await page.request.post(`/api/v1/projects/${project}/imports/${id}/commit`, { data: {} });
+  await importList(page, project, 'brackwater-points.csv');
   const design = await designOf(page, project);
   const point = design.points.find((p) => p.tag === 'GC1-L01');
 
@@ -37,4 +33,39 @@ test('two people change the same field: both values are shown, and the choice is
   await dialog.getByRole('button', { name: /mine/i }).click();
   await expect(page.getByText('All saved').first()).toBeVisible();
   expect((await designOf(page, project)).points.find((p) => p.tag === 'GC1-L01')?.description).toBe('Head pulley, mine');
+});
+
+test("a colleague's edit arrives by itself, and undoes nothing of one's own", async ({ page, browser }) => {
+  await signIn(page, 'engineer');
+  const project = await freshProject(page, 'Live');
+  await page.goto(`/projects/${project}/hardware?part=circuits`);
+  const limit = page.getByRole('textbox', { name: /k/ }).first();
+  await expect(limit).toBeVisible();
+
+  const colleague = await browser.newPage();
+  await signIn(colleague, 'engineer');
+  const circuit = (await designOf(colleague, project)).circuits.find((c) => c.name === 'C1');
+  const answer = await colleague.request.patch(`/api/v1/projects/${project}/circuits/${circuit?.id}`, {
+    data: { concurrencyLimit: 3 }, headers: { 'If-Match': `"${circuit?.version}"` },
+  });
+  expect(answer.status()).toBe(200);
+  await colleague.close();
+  await expect(limit).toHaveValue('3');
+});
+
+test('an output is mapped by keyboard: type part of a tag in a free channel, Enter, and unmapped with Delete', async ({ page }) => {
+  await signIn(page, 'engineer');
+  const project = await freshProject(page, 'Keyboard');
+  await importList(page, project, 'brackwater-points.csv');
+  await page.goto(`/projects/${project}/mapping`);
+  const row = page.getByRole('rowgroup', { name: 'PLC1 DO1 group 2' }).getByRole('row', { name: /^%QX5\.0 / });
+  await row.focus();
+  await page.keyboard.type('GC3-L03');
+  await expect(page.getByRole('option', { name: /GC3-L03/ })).toBeVisible();
+  await page.keyboard.press('Enter');
+  await expect(page.getByText('18 of 60 dispensers mapped')).toBeVisible();
+  await expect(row).toContainText('GC3-L03');
+  await row.focus();
+  await page.keyboard.press('Delete');
+  await expect(page.getByText('17 of 60 dispensers mapped')).toBeVisible();
 });

@@ -1,5 +1,6 @@
 import { expect, type Page } from '@playwright/test';
 import { randomUUID } from 'node:crypto';
+import { readFileSync } from 'node:fs';
 
 interface Account {
   readonly role: string;
@@ -60,3 +61,11 @@ export async function designOf(page: Page, projectId: string): Promise<DesignAns
 }
 
 export const tagList = (name: string): string => `test/fixtures/tag-lists/${name}`;
+
+/** Imports a tag list as it is, through the API. */
+export async function importList(page: Page, projectId: string, name: string): Promise<void> {
+  const file = { name, mimeType: 'text/csv', buffer: readFileSync(tagList(name)) };
+  const upload = await page.request.post(`/api/v1/projects/${projectId}/imports`, { multipart: { file } });
+  const { id } = (await upload.json()) as { id: string };
+  expect((await page.request.post(`/api/v1/projects/${projectId}/imports/${id}/commit`, { data: {} })).status()).toBe(200);
+}

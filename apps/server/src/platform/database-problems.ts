@@ -35,7 +35,11 @@ const ranges: Readonly<Record<string, { field: string; message: string }>> = {
   module_types_input_ck: { field: 'inputType', message: 'An input module states its input type, an output module does not.' },
 };
 
-const words = (table: string | undefined) => (table ?? 'another row').replaceAll('_', ' ');
+/** Tables whose rows people call otherwise. */
+const called: Readonly<Record<string, string>> = {
+  cable_nodes: 'junction boxes', module_groups: 'output groups', assignments: 'mapped channels', dispenser_types: 'dispenser types',
+};
+const words = (table = 'other rows') => called[table] ?? table.replaceAll('_', ' ');
 
 /** Turns a refusal of the database into words, or answers null where it is none. */
 export function problemOfDatabase(error: unknown): ProblemError | null {
@@ -46,7 +50,7 @@ export function problemOfDatabase(error: unknown): ProblemError | null {
     case '23505': {
       if (name.endsWith('_pkey')) return new Conflict('This identifier is taken by another row. Make a new one.');
       const known = taken[name];
-      return known ? new Conflict(known.message, [known]) : new Conflict(`This ${words(cause.table_name)} entry exists already (${name})`);
+      return known ? new Conflict(known.message, [known]) : new Conflict(`One of the ${words(cause.table_name)} has this already (${name}).`);
     }
     case '23503': return foreignKeyProblem(cause, name);
     case '23514': return new Invalid([ranges[name] ?? { field: '', message: `A value is outside its range (${name}).` }]);

@@ -25,6 +25,8 @@ export interface Occupant {
 /** A group of a module with its feed, its worst load, what the checks found on it, and its channels. */
 export interface GroupSection {
   readonly key: string;
+  /** Modules of different controllers may have the same name. */
+  readonly controller: string;
   readonly module: Module;
   readonly type: ModuleType;
   readonly groupIndex: number;
@@ -73,7 +75,7 @@ export function mappingSections(
   const context = contextOf(design, assessment, proposals);
   return modulesByCabinet(design).flatMap(({ modules }) => modules)
     .filter(({ type }) => shown === 'both' || type.kind === shown)
-    .flatMap(({ module, type }) => groupsOf(type).map((groupIndex) => groupSection(context, module, type, groupIndex)));
+    .flatMap(({ module, type, controller }) => groupsOf(type).map((groupIndex) => groupSection(context, module, type, groupIndex, controller.name)));
 }
 
 interface Context {
@@ -103,14 +105,14 @@ function contextOf(design: Design, assessment: Assessment, proposals: readonly P
 const groupsOf = (type: ModuleType): readonly number[] =>
   Array.from({ length: Math.ceil(type.channels / type.channelsPerGroup) }, (_, i) => i);
 
-function groupSection(context: Context, module: Module, type: ModuleType, groupIndex: number): GroupSection {
+function groupSection(context: Context, module: Module, type: ModuleType, groupIndex: number, controller: string): GroupSection {
   const from = groupIndex * type.channelsPerGroup;
   const to = Math.min(from + type.channelsPerGroup, type.channels) - 1;
   const channels = Array.from({ length: to - from + 1 }, (_, i) => channelRow(context, module, type, from + i));
   const key = groupKey(module.id, groupIndex);
   const feed = context.design.moduleGroups.find((g) => g.moduleId === module.id && g.groupIndex === groupIndex)?.circuitId;
   return {
-    key, module, type, groupIndex, channels,
+    key, controller, module, type, groupIndex, channels,
     first: directAddress(type.kind, module.baseByte, from), last: directAddress(type.kind, module.baseByte, to),
     circuit: (feed && context.circuits.get(feed)) ?? null,
     load: context.assessment.groups.get(key) ?? null,
