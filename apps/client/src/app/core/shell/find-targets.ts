@@ -7,6 +7,8 @@ export interface FindTarget {
   readonly label: string;
   readonly detail: string;
   readonly link: readonly string[];
+  /** The row to begin with, where the page shows many. */
+  readonly point?: string;
 }
 
 export function findTargets(nav: readonly NavGroup[], design: Design | null, assessment: Assessment | null): readonly FindTarget[] {
@@ -21,7 +23,7 @@ export function findTargets(nav: readonly NavGroup[], design: Design | null, ass
       const point = points.get(d.pointId);
       return { kind: 'point', label: point?.tag ?? '', detail: point?.description ?? '', link: [...base, 'lanes', d.id] };
     }),
-    ...design.points.filter((p) => !withDispenser.has(p.id)).map((p): FindTarget => ({ kind: 'point', label: p.tag, detail: p.description ?? '', link: [...base, 'points'] })),
+    ...design.points.filter((p) => !withDispenser.has(p.id)).map((p): FindTarget => ({ kind: 'point', label: p.tag, detail: p.description ?? '', link: [...base, 'points'], point: p.id })),
     ...design.dispensers.flatMap((d) => addresses(assessment, d.id).map((address): FindTarget =>
       ({ kind: 'address', label: address, detail: points.get(d.pointId)?.tag ?? '', link: [...base, 'lanes', d.id] }))),
     ...hardware(design).map(([label, detail]): FindTarget => ({ kind: 'hardware', label, detail, link: [...base, 'hardware'] })),

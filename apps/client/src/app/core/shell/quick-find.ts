@@ -48,6 +48,6 @@ export class QuickFind {
 
   protected go(target: FindTarget): void {
     this.dialog.close();
-    void this.router.navigate([...target.link]);
+    void this.router.navigate([...target.link], target.point === undefined ? {} : { queryParams: { point: target.point } });
   }
 }

@@ -1,10 +1,12 @@
 import { ChangeDetectionStrategy, Component, computed, inject, viewChild } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { MatMenu, MatMenuItem, MatMenuTrigger } from '@angular/material/menu';
+import { RouterLink } from '@angular/router';
 import { ProjectStore } from '../../core/project/project-store';
 import { Segmented } from '../../shared/controls/segmented';
 import type { Mend } from '../../shared/findings/finding-mend';
 import { Icon } from '../../shared/icon/icon';
+import { EmptyState } from '../../shared/states/empty-state';
 import { ErrorState } from '../../shared/states/error-state';
 import { LoadingRows } from '../../shared/states/loading-rows';
 import { PageHead } from '../../shared/states/page-head';
@@ -17,7 +19,7 @@ import { UnmappedList } from '../unmapped-list/unmapped-list';
 
 @Component({
   selector: 'lw-mapping-page',
-  imports: [ChannelPanel, ChannelStrip, ChannelTable, ErrorState, Icon, LoadingRows, MatButton, MatMenu, MatMenuItem, MatMenuTrigger, PageHead, PreviewPanel, Segmented, UnmappedList],
+  imports: [ChannelPanel, ChannelStrip, ChannelTable, EmptyState, ErrorState, Icon, LoadingRows, MatButton, MatMenu, MatMenuItem, MatMenuTrigger, PageHead, PreviewPanel, RouterLink, Segmented, UnmappedList],
   providers: [MappingViewStore],
   changeDetection: ChangeDetectionStrategy.OnPush,
   host: { '(document:keydown.alt.a)': 'preview($event)', '(document:keydown.escape)': 'view.discardPreview()' },
@@ -39,9 +41,14 @@ export class MappingPage {
     return `${c.mapped} of ${c.dispensers} dispensers mapped. ${c.cabinets} cabinets, ${c.modules} modules.`;
   });
 
+  protected readonly nothingOpen = computed(() => {
+    if (this.project.design()?.dispensers.length === 0) return 'No dispensers yet: import the tag list, or enter points.';
+    return this.view.open().length === 0 ? 'Every dispenser has its channels.' : 'No dispenser without a channel meets the filter.';
+  });
+
   protected preview(event?: Event): void {
     event?.preventDefault();
-    if (this.view.canEdit()) this.view.previewAutoAssign();
+    if (this.view.canEdit() && this.view.open().length > 0) this.view.previewAutoAssign();
   }
 
   protected show(kind: string): void {

@@ -15,6 +15,8 @@ export class UnmappedList {
   readonly lanes = input.required<readonly OpenLane[]>();
   readonly selected = input.required<ReadonlySet<string>>();
   readonly editable = input.required<boolean>();
+  /** Said where no row is shown. */
+  readonly empty = input.required<string>();
   readonly toggled = output<string>();
   readonly allToggled = output<boolean>();
 

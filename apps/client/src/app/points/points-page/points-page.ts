@@ -1,6 +1,6 @@
 import { NgTemplateOutlet } from '@angular/common';
 import { BreakpointObserver } from '@angular/cdk/layout';
-import { ChangeDetectionStrategy, Component, computed, type ElementRef, inject, viewChild } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, type ElementRef, inject, viewChild, effect, input, untracked } from '@angular/core';
 import { toSignal } from '@angular/core/rxjs-interop';
 import { MatButton, MatIconButton } from '@angular/material/button';
 import { MatDialog } from '@angular/material/dialog';
@@ -40,7 +40,10 @@ export class PointsPage {
   private readonly edits = inject(PointEdits);
   private readonly dialog = inject(MatDialog);
   private readonly router = inject(Router);
+  /** Of the address: the point to begin with. */
+  readonly point = input<string>();
   private readonly grid = viewChild(PointsGrid);
+  private beganWith: string | null = null;
   private readonly filter = viewChild<ElementRef<HTMLInputElement>>('filter');
 
   protected readonly phone = toSignal(inject(BreakpointObserver).observe('(max-width: 600px)').pipe(map((state) => state.matches)), { initialValue: false });
@@ -54,6 +57,20 @@ export class PointsPage {
   });
   /** On a phone the panel is a sheet over the list, in the page only while it is open. */
   protected readonly panelRow = computed(() => ((this.phone() ? this.view.sheetOpen() : this.view.panelOpen()) ? this.view.focusedRow() : null));
+
+  constructor() {
+    // The router sets the input, and the rows may come later than it.
+    effect(() => {
+      const pointId = this.point();
+      if (!pointId || !this.view.rows().some((row) => row.point.id === pointId)) return;
+      untracked(() => {
+        if (this.beganWith === pointId) return;
+        this.beganWith = pointId;
+        this.view.goTo({ pointId, column: 'doseUl' });
+        this.view.openPanel();
+      });
+    });
+  }
 
   protected focusFilter(event: Event): void {
     event.preventDefault();
