@@ -64,9 +64,10 @@ function othersSpareV({ circuits, worstCase: { internalOhm } }: SolvedSupply, at
     if (c === at) return;
     network.minV.forEach((minV, i) => {
       if (!network.known[i]) return;
-      const lowest = network.fourCore[i] ? Math.min(worst.runV[i], worst.idleV[i]) : worst.runV[i];
-      const spare = lowest - minV + internalOhm * addedA;
-      if (spare >= -TOLERANCE) least = Math.min(least, spare);
+      for (const volts of network.fourCore[i] ? [worst.runV[i], worst.idleV[i]] : [worst.runV[i]]) {
+        const spare = volts - minV + internalOhm * addedA;
+        if (spare >= -TOLERANCE) least = Math.min(least, spare);
+      }
     });
   });
   return least;

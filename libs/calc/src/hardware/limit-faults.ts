@@ -28,12 +28,13 @@ export interface Fault {
   readonly own: boolean;
 }
 
-/** Lanes whose voltage is under their minimum, by place. */
-export function failingLanes({ known, fourCore, minV }: CircuitNetwork, { runV, idleV }: CircuitVoltages): number[] {
-  const failing: number[] = [];
-  for (let i = 0; i < runV.length; i++) {
-    const lowest = fourCore[i] ? Math.min(runV[i], idleV[i]) : runV[i];
-    if (known[i] && lowest < minV[i] - TOLERANCE) failing.push(i);
+/** Lanes whose voltage is under their minimum, by place; a four-core lane may fail running, idle, or both, each a fault of its own. */
+export function failingLanes({ known, fourCore, minV }: CircuitNetwork, { runV, idleV }: CircuitVoltages): { readonly lane: number; readonly idle: boolean }[] {
+  const failing: { lane: number; idle: boolean }[] = [];
+  for (let lane = 0; lane < runV.length; lane++) {
+    if (!known[lane]) continue;
+    if (runV[lane] < minV[lane] - TOLERANCE) failing.push({ lane, idle: false });
+    if (fourCore[lane] && idleV[lane] < minV[lane] - TOLERANCE) failing.push({ lane, idle: true });
   }
   return failing;
 }
@@ -54,7 +55,7 @@ export function faultFinder(trial: LimitTrial): (voltages: readonly CircuitVolta
       supplyA += amps;
       const fault = (what: string): number => faults.push({ key: `${what} ${c}`, own: c === at });
       if (collapsed) fault('collapse');
-      else for (const i of failingLanes(network, voltages[c])) fault(`lane ${i}`);
+      else for (const { lane, idle } of failingLanes(network, voltages[c])) fault(`lane ${lane} ${idle ? 'idle' : 'running'}`);
       if (amps > network.circuit.protectionA + TOLERANCE) fault('protection');
     });
     if (supplyA > supplyMayA + TOLERANCE) faults.push({ key: 'supply', own: true });
