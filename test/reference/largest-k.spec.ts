@@ -2,6 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { assess, type Design } from '#calc';
 import { arbitraryCircuit } from '#support/random-circuit.ts';
+import { runs } from '#support/property-runs.ts';
 
 const BAD = /^(VD-01|VD-02|VD-04|IO-03|IO-05|SU-01|PR-01)/;
 
@@ -68,7 +69,7 @@ describe.each([
   it('passes, and one more does not: one circuit', () => {
     fc.assert(fc.property(arbitraryCircuit({ lanes: 6, constantPower }), minimum, rating, rating, (circuit, minV, protectionA, groupA) => {
       judge(demanding(circuit, minV, protectionA, groupA), 'circuit');
-    }), { numRuns: 60 });
+    }), { numRuns: runs(60) });
   });
 
   it('passes, and one more does not: two circuits that share their supply', () => {
@@ -79,7 +80,7 @@ describe.each([
       const design = { ...both, supplies: both.supplies.map((supply) => ({ ...supply, internalOhm })) };
       judge(design, 'circuit');
       judge(design, 'second');
-    }), { numRuns: 60 });
+    }), { numRuns: runs(60) });
   });
 });
 

@@ -3,6 +3,7 @@ import { describe, expect, it } from 'vitest';
 import type { RankBy } from '#calc';
 import { alternatives, assessPoint, demandOf, pulsePlan, timedPlan, type Alternative, type PulsePlanInput } from '../../libs/calc/src/points/index.ts';
 import { aBearingPoint, aContext, aDispenser, aPoint, aProject, aType } from '../../libs/calc/src/points/testing/rows.ts';
+import { runs } from '#support/property-runs.ts';
 
 const SPAN_MS = 3_600_000_000n;
 const doseUl = fc.integer({ min: 1, max: 50 }).map((steps) => steps * 100);
@@ -22,7 +23,7 @@ function forPlans(check: (plan: NonNullable<ReturnType<typeof pulsePlan>>, input
   fc.assert(fc.property(inputs, (input) => {
     const plan = pulsePlan(input);
     if (plan) check(plan, input);
-  }), { numRuns: 400 });
+  }), { numRuns: runs(400) });
 }
 
 describe('pulse plan (source: definition of the interval, rounded down)', () => {
@@ -179,20 +180,20 @@ describe('alternatives (source: the checks of the plan)', () => {
       expect(ranked.flatMap(findingsOf)).toEqual([]);
       expect(rejected.every((each) => findingsOf(each).length > 0)).toBe(true);
       expect(ranked.length + rejected.length).toBe(75);
-    }), { numRuns: 20 });
+    }), { numRuns: runs(20) });
   });
 
   it('stand in the order of the preference', () => {
     fc.assert(fc.property(contexts, rankings, (ctx, rankBy) => {
       const figures = alternatives(ctx, rankBy).ranked.map(measure[rankBy]);
       expect(figures).toEqual([...figures].sort((a, b) => a - b));
-    }), { numRuns: 30 });
+    }), { numRuns: runs(30) });
   });
 
   it('are in the same order however the type lists its cartridges', () => {
     fc.assert(fc.property(contexts, rankings, (ctx, rankBy) => {
       const turned = { ...ctx, type: aType({ cartridgesUl: [250_000, 60_000, 120_000] }) };
       expect(alternatives(turned, rankBy).ranked).toEqual(alternatives(ctx, rankBy).ranked);
-    }), { numRuns: 20 });
+    }), { numRuns: runs(20) });
   });
 });

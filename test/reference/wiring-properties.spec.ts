@@ -4,6 +4,7 @@ import { assess, type Assessment, type Design, STANDARD_SECTIONS_MM2 } from '#ca
 import { buildDesign, buildFourCoreType, buildLane, buildNode, buildSupply, buildSupplyType } from '#support/design-builder.ts';
 import { modelOf, solveSubset } from '#support/circuit-model.ts';
 import { arbitraryCircuit, permittedSets } from '#support/random-circuit.ts';
+import { runs } from '#support/property-runs.ts';
 
 /** Judged by a model of its own that walks currents edge by edge (Kirchhoff), over every permitted set. */
 interface Brute {
@@ -46,7 +47,7 @@ describe('worst case under k, constant current', () => {
         expect(lane.worst!.volts).toBeCloseTo(brute.runV.get(id)!, 9);
         if (lane.idle) expect(lane.idle.volts).toBeCloseTo(brute.idleV.get(id)!, 9);
       }
-    }), { numRuns: 60 });
+    }), { numRuns: runs(60) });
   });
 
   it('names a set that causes it, the lane first, no more than k', () => {
@@ -60,7 +61,7 @@ describe('worst case under k, constant current', () => {
         expect(solveSubset(model, new Set(worst!.worstSet))!.get(id)).toBeCloseTo(worst!.volts, 9);
         if (timed) expect(limited).not.toContain(id);
       }
-    }), { numRuns: 60 });
+    }), { numRuns: runs(60) });
   });
 
   it('falls from station to station along the lane', () => {
@@ -72,7 +73,7 @@ describe('worst case under k, constant current', () => {
         }
         expect(profile.at(-1)).toMatchObject({ worstV: worst!.volts, aloneV });
       }
-    }), { numRuns: 40 });
+    }), { numRuns: runs(40) });
   });
 
   it('only falls as k grows, down to the figure with all on', () => {
@@ -85,7 +86,7 @@ describe('worst case under k, constant current', () => {
       }
       const all = [...assess(design).lanes.values()].map((lane) => lane.allOn!.volts);
       all.forEach((volts, i) => expect(volts).toBeCloseTo(before[i], 9));
-    }), { numRuns: 20 });
+    }), { numRuns: runs(20) });
   });
 });
 
@@ -107,7 +108,7 @@ describe('smallest passing cross-section of the own cable', () => {
       expect(passes(smallest)).toBe(true);
       const smaller = STANDARD_SECTIONS_MM2[STANDARD_SECTIONS_MM2.indexOf(smallest) - 1];
       if (smaller !== undefined) expect(passes(smaller)).toBe(false);
-    }), { numRuns: 80 });
+    }), { numRuns: runs(80) });
   });
 });
 
@@ -126,13 +127,13 @@ describe('linear laws, constant current', () => {
   it('half the length makes half the drop', () => {
     fc.assert(fc.property(fc.integer({ min: 2, max: 60 }), amps, amps, (length, a, b) => {
       expect(drop(chain(length / 2, [a, b]))).toBeCloseTo(drop(chain(length, [a, b])) / 2, 9);
-    }), { numRuns: 50 });
+    }), { numRuns: runs(50) });
   });
 
   it('drops of two loads add up (superposition)', () => {
     fc.assert(fc.property(fc.integer({ min: 1, max: 60 }), amps, amps, (length, a, b) => {
       expect(drop(chain(length, [a, b]))).toBeCloseTo(drop(chain(length, [a, 0])) + drop(chain(length, [0, b])), 9);
-    }), { numRuns: 50 });
+    }), { numRuns: runs(50) });
   });
 });
 
@@ -150,7 +151,7 @@ describe('worst case under k, constant power', () => {
         if (!lane.worst.bound) expect(lane.worst.volts).toBeCloseTo(brute.runV.get(id)!, 7);
         if (lane.idle) expect(lane.idle.volts).toBeLessThanOrEqual(brute.idleV.get(id)! + 1e-8);
       }
-    }), { numRuns: 60 });
+    }), { numRuns: runs(60) });
   });
 
   it('never gives NaN, however large the loads: it says that the voltage collapses', () => {
@@ -163,6 +164,6 @@ describe('worst case under k, constant power', () => {
       }
       expect(Number.isFinite(circuits.get('circuit')!.worstA)).toBe(true);
       expect(Number.isFinite(supplies.get('supply')!.demandA)).toBe(true);
-    }), { numRuns: 60 });
+    }), { numRuns: runs(60) });
   });
 });

@@ -1,6 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { guardText, hasGuardMark, markHeadings, unguardText } from './apostrophe-guard.ts';
+import { runs } from '#support/property-runs.ts';
 
 /** Texts made of the signs that matter, besides any other text. */
 const texts = fc.oneof(
@@ -26,14 +27,14 @@ describe('the apostrophe guard', () => {
   it('comes off again from every text', () => {
     fc.assert(
       fc.property(texts, (text) => unguardText(guardText(text)) === text),
-      { numRuns: 2000 },
+      { numRuns: runs(2000) },
     );
   });
 
   it('leaves no text that begins with what a spreadsheet runs', () => {
     fc.assert(
       fc.property(texts, (text) => !/^\s*[=+\-@＝＋－＠]|^[\t\r\n\0]/u.test(guardText(text))),
-      { numRuns: 2000 },
+      { numRuns: runs(2000) },
     );
   });
 
