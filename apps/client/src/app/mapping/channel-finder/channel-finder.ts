@@ -33,7 +33,11 @@ export class ChannelFinder {
   });
 
   constructor() {
-    afterNextRender(() => this.field().nativeElement.focus());
+    afterNextRender(() => {
+      const field = this.field().nativeElement;
+      field.focus();
+      field.setSelectionRange(field.value.length, field.value.length);
+    });
   }
 
   protected search(text: string): void {

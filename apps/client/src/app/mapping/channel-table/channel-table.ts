@@ -53,12 +53,14 @@ export class ChannelTable {
 
   protected press(event: KeyboardEvent, row: ChannelRow): void {
     const act = this.acts[event.key];
-    if (act) {
+    if (act && this.searching()?.key !== row.key) {
       event.preventDefault();
       act(row, event);
     } else if (this.editable() && !row.occupant && event.key.length === 1 && !event.ctrlKey && !event.altKey && !event.metaKey) {
       event.preventDefault();
-      this.searching.set({ key: row.key, first: event.key });
+      // Whoever types fast is ahead of the field that opens: what came before it is kept.
+      const before = this.searching();
+      this.searching.set({ key: row.key, first: (before?.key === row.key ? before.first : '') + event.key });
     }
   }
 
