@@ -41,6 +41,12 @@ export class ChannelTable {
   protected readonly searching = signal<{ readonly key: string; readonly first: string } | null>(null);
   protected readonly upTo = ampsAgainstMaximum;
 
+  /** Puts the keyboard on the first channel that auto-assignment would give. */
+  goToProposed(): void {
+    const row = this.sections().flatMap((s) => s.channels).find((r) => r.proposed);
+    if (row) this.focus(row.key);
+  }
+
   /** Puts the keyboard on the first channel of a module. */
   goTo(moduleId: string): void {
     const row = this.sections().flatMap((s) => s.channels).find((r) => r.module.id === moduleId);

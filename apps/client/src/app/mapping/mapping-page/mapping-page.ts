@@ -48,7 +48,9 @@ export class MappingPage {
 
   protected preview(event?: Event): void {
     event?.preventDefault();
-    if (this.view.canEdit() && this.view.open().length > 0) this.view.previewAutoAssign();
+    if (!this.view.canEdit() || this.view.open().length === 0) return;
+    this.view.previewAutoAssign();
+    setTimeout(() => this.table()?.goToProposed());
   }
 
   protected show(kind: string): void {
