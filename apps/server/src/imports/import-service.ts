@@ -46,7 +46,7 @@ export async function previewImport(context: Context, projectId: string, id: str
 
 /**
  * Reads the kept file again and imports it: all rows that are not held back, or nothing, in one transaction. The same
- * commit again answers the same and changes nothing.
+ * commit again changes nothing and answers what the first one created and updated; rows that it left alone are not kept.
  * @throws {NotFound}, {StaleWrite} where somebody changed a row that it updates between reading and writing
  */
 export async function commitImport(context: Context, projectId: string, id: string, settings: ImportSettings): Promise<ImportResult> {

@@ -162,7 +162,7 @@ function profiler(solution: CircuitSolution) {
       const sums = sumsAt(station, at.conductors);
       const trunkOhm = network.tree.powerOhm[station];
       const worstDrop = others ? sums.always + setDropV(network, worst, at, trunkOhm, t, others) : sums.everybody;
-      const aloneDrop = sums.idle + addedBy(network, alone, at.conductors, trunkOhm, t);
+      const aloneDrop = sums.idle + addedBy(alone, at.conductors, trunkOhm, t);
       profile.push({
         label: station === 0 ? `Terminals ${network.circuit.name}` : network.tree.nodes[station - 1].location,
         metres: network.tree.metres[station],
@@ -184,16 +184,16 @@ function wayTo({ tree }: CircuitNetwork, station: number): number[] {
 
 /** Drop that the lane and the others of its worst set add at a station on the lane's way, V. */
 function setDropV(network: CircuitNetwork, solved: CircuitVoltages, at: StationView, trunkOhm: number, t: number, others: Int32Array): number {
-  let drop = addedBy(network, solved, at.conductors, trunkOhm, t);
+  let drop = addedBy(solved, at.conductors, trunkOhm, t);
   for (const i of others) {
     // Shared with the station before: no more than the whole way there.
     const shared = Math.min(trunkOhm, at.sharedOhm[network.station[i]]);
-    drop += addedBy(network, solved, at.conductors, shared, i);
+    drop += addedBy(solved, at.conductors, shared, i);
   }
   return drop;
 }
 
-function addedBy(network: CircuitNetwork, { currents, upstream }: CircuitVoltages, { plus, zero }: Conductors, trunkOhm: number, i: number): number {
+function addedBy({ currents, upstream }: CircuitVoltages, { plus, zero }: Conductors, trunkOhm: number, i: number): number {
   return currents.addedSupply[i] * upstream.sharedOhm + currents.addedReturn[i] * zero * trunkOhm + currents.addedOut[i] * plus * trunkOhm;
 }
 

@@ -3,10 +3,11 @@ import type { Problem } from '#contract';
 import { firstValueFrom } from 'rxjs';
 import { problemOf } from '../core/api/problem';
 import { SessionStore } from '../core/session/session-store';
+import { latestVersions } from '../shared/fields/latest-versions';
 import { CatalogueApi } from './catalogue-api';
 import type { Entry, Kind } from './fields/field';
 import { kindView, KIND_VIEWS } from './fields/kind-views';
-import { latestVersions, versionsOf } from './versions';
+import { versionsOf } from './versions';
 
 /** What the panel beside the table shows: a type, or the form that makes a new one or the next version. */
 export type Open = { readonly mode: 'read'; readonly id: string } | { readonly mode: 'new' } | { readonly mode: 'version'; readonly id: string };

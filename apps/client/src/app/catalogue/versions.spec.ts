@@ -1,4 +1,5 @@
-import { latestVersions, versionsOf } from './versions';
+import { latestVersions } from '../shared/fields/latest-versions';
+import { versionsOf } from './versions';
 
 const entry = (name: string, typeVersion: number) => ({ id: `${name}-${typeVersion}`, name, typeVersion });
 const entries = [entry('Cable 10', 1), entry('Cable 2', 2), entry('Cable 2', 10), entry('Cable 2', 1)];

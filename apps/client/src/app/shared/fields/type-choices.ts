@@ -1,4 +1,5 @@
 import type { Choice } from './choice';
+import { byName, latestVersions } from './latest-versions';
 
 interface TypeVersion {
   readonly id: string;
@@ -8,10 +9,9 @@ interface TypeVersion {
 
 /** The latest version of each type of the catalogue, and the version in use where that is another; by name. */
 export function typeChoices(types: readonly TypeVersion[], inUse: string | null = null): readonly Choice<string>[] {
-  const latest = new Map<string, TypeVersion>();
-  for (const type of types) if ((latest.get(type.name)?.typeVersion ?? 0) < type.typeVersion) latest.set(type.name, type);
-  return types.filter((type) => type.id === inUse || latest.get(type.name) === type)
-    .sort((a, b) => a.name.localeCompare(b.name, 'en', { numeric: true }) || b.typeVersion - a.typeVersion)
+  const latest = new Set(latestVersions(types));
+  return types.filter((type) => type.id === inUse || latest.has(type))
+    .sort((a, b) => byName(a, b) || b.typeVersion - a.typeVersion)
     .map((type) => ({ value: type.id, label: typeLabel(type) }));
 }
 
