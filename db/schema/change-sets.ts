@@ -1,4 +1,4 @@
-import { bigint, index, jsonb, pgTable, text, timestamp, unique, uuid } from 'drizzle-orm/pg-core';
+import { bigint, foreignKey, index, jsonb, pgTable, text, timestamp, unique, uuid } from 'drizzle-orm/pg-core';
 import { belowProject, withinProject } from './project-keys.ts';
 
 /** One edit: who, when, what. Undo, audit view and live events are readings of these two tables. */
@@ -10,10 +10,14 @@ export const changeSets = pgTable('change_sets', {
   personId: uuid('person_id').notNull(),
   at: timestamp({ withTimezone: true }).notNull().defaultNow(),
   summary: text().notNull(),
+  /** The set that this one took back; null for an ordinary edit. Redo is a set that undoes an undo. */
+  undoes: uuid(),
 }, (t) => [
   unique('change_sets_sequence_uq').on(t.projectId, t.sequence),
   unique('change_sets_key').on(t.orgId, t.projectId, t.id),
   belowProject('change_sets', t),
+  foreignKey({ name: 'change_sets_undoes_fk', columns: [t.orgId, t.projectId, t.undoes], foreignColumns: [t.orgId, t.projectId, t.id] }),
+  index('change_sets_undoes_ix').on(t.undoes),
 ]).enableRLS();
 
 /** A row that a change set touched. `before` is null for a creation, `after` for a deletion. */

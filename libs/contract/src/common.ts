@@ -26,6 +26,6 @@ export type Problem = Static<typeof Problem>;
 /** The stable types of problems, as the last part of `https://lanewright.example/problems/…`. */
 export const problemTypes = [
   'bad-request', 'invalid-input', 'not-signed-in', 'sign-in-failed', 'not-allowed', 'not-found', 'stale-write',
-  'version-missing', 'conflict', 'still-used', 'too-large', 'unreadable-file', 'internal',
+  'version-missing', 'conflict', 'still-used', 'too-large', 'unreadable-file', 'undo-refused', 'cancelled', 'internal',
 ] as const;
 export type ProblemType = (typeof problemTypes)[number];

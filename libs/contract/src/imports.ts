@@ -9,7 +9,10 @@ export const ReadingSettings = Type.Object({
   encoding: Type.Optional(oneOf([...encodings])),
   delimiter: Type.Optional(oneOf([...delimiters])),
   decimal: Type.Optional(oneOf(['.', ','])),
+  /** Number of the lowest row of the headings, in every sheet that is taken. */
   headerRow: Type.Optional(Whole(1, 1000)),
+  /** Names of the sheets that are taken together; their headings are alike. */
+  sheets: Type.Optional(Type.Array(Text(31), { minItems: 1, maxItems: 200 })),
 }, { additionalProperties: false });
 export type ReadingSettings = Static<typeof ReadingSettings>;
 
@@ -29,7 +32,7 @@ export const ImportColumn = Type.Object({
   /** The first few texts in it. */
   samples: Type.Array(Type.String()),
   field: nullable(Type.String()),
-  /** Why this field: "by name", "by values"; empty where a person chose it. */
+  /** Why this field: "as last time", "left out last time", "by name", "by values"; empty where a person chose it. */
   reason: Type.String(),
 });
 export type ImportColumn = Static<typeof ImportColumn>;
@@ -42,8 +45,14 @@ export const ImportNote = Type.Object({ code: Type.String(), field: Type.String(
 const Value = Type.Union([Type.String(), Type.Number(), Type.Null()]);
 
 export const ImportRow = Type.Object({
+  /** Place in the preview, from 0. */
+  index: Type.Integer(),
+  /** The sheet of a workbook; null in a CSV. */
+  sheet: nullable(Type.String()),
   row: Type.Integer(),
   line: Type.Integer(),
+  /** Every row of the file that makes this point; more than one where each row is a signal. */
+  rows: Type.Array(Type.Integer()),
   action: oneOf(['create', 'update', 'same', 'hold', 'skip']),
   why: nullable(Type.String()),
   values: Type.Record(Type.String(), Value),
@@ -63,19 +72,58 @@ export const ImportCounts = Type.Object({
 export const ImportPreview = Type.Object({
   id: Uuid,
   fileName: Type.String(),
+  /** As the file was read; a workbook has no encoding and no delimiter, a CSV no sheets. */
   settings: Type.Object({
-    encoding: oneOf([...encodings]), delimiter: oneOf([...delimiters]), decimal: oneOf(['.', ',']), headerRow: Type.Integer(),
+    encoding: nullable(oneOf([...encodings])), delimiter: nullable(oneOf([...delimiters])), decimal: oneOf(['.', ',']),
+    headerRow: Type.Integer(),
   }),
+  /** `alike`: its headings are those of the sheets taken, so that it can be taken with them. */
+  sheets: Type.Array(Type.Object({ name: Type.String(), rows: Type.Integer(), taken: Type.Boolean(), alike: Type.Boolean() })),
   ownExport: Type.Boolean(),
+  /** Formulas that were saved without their result: their cells are read as blank. */
+  formulasWithoutValue: Type.Integer(),
   columns: Type.Array(ImportColumn),
   /** The fields that a column may be given, with their labels. */
   fields: Type.Array(Type.Object({ key: Type.String(), label: Type.String() })),
   /** Texts of choice fields that the project does not know, with the values to choose from. */
-  unknownValues: Type.Array(Type.Object({ field: Type.String(), text: Type.String(), rows: Type.Integer(), choices: Type.Array(Type.String()) })),
+  unknownValues: Type.Array(Type.Object({
+    field: Type.String(), text: Type.String(), rows: Type.Integer(), choices: Type.Array(Type.String()),
+    /** It is taken as it was last time: for `value`, or for blank where that is null. */
+    remembered: Type.Boolean(),
+    value: nullable(Type.String()),
+  })),
+  /** Why it cannot be imported as the columns stand, and what to do; there are no rows then. */
+  refusal: nullable(Type.Object({ title: Type.String(), detail: Type.String() })),
   counts: ImportCounts,
-  rows: Type.Array(ImportRow),
 });
 export type ImportPreview = Static<typeof ImportPreview>;
+
+const rowFilters = ['all', 'create', 'update', 'same', 'hold', 'problems', 'skip'] as const;
+export const ImportRowsQuery = Type.Object({
+  show: Type.Optional(oneOf([...rowFilters])),
+  offset: Type.Optional(Whole(0, 100_000)),
+  limit: Type.Optional(Whole(1, 500)),
+}, { additionalProperties: false });
+export type RowFilter = (typeof rowFilters)[number];
+
+/** Some rows of the last preview. */
+export const ImportRowPage = Type.Object({
+  /** Rows of this kind in the whole file. */
+  total: Type.Integer(),
+  rows: Type.Array(ImportRow),
+});
+export type ImportRowPage = Static<typeof ImportRowPage>;
+
+/** How far an import is that is being read or written now. */
+export const ImportWork = Type.Object({
+  stage: oneOf(['waiting', 'reading', 'checking', 'writing']),
+  /** Rows done of `total`; total is null while it cannot be known. */
+  done: Type.Integer(),
+  total: nullable(Type.Integer()),
+  /** Milliseconds since it began. */
+  elapsedMs: Type.Integer(),
+});
+export type ImportWork = Static<typeof ImportWork>;
 
 export const ImportResult = Type.Object({
   id: Uuid, created: Type.Integer(), updated: Type.Integer(), same: Type.Integer(), heldBack: Type.Integer(),

@@ -2,6 +2,7 @@ export * from './accounts.ts';
 export * from './catalogue.ts';
 export * from './common.ts';
 export * from './design-of.ts';
+export * from './field-words.ts';
 export * from './hardware.ts';
 export * from './imports.ts';
 export * from './mapping.ts';

@@ -86,6 +86,10 @@ export const NewChangeSet = Type.Object({
 }, { additionalProperties: false });
 export type NewChangeSet = Static<typeof NewChangeSet>;
 
+/** Takes a change set back by a new one with this identifier: the same request again is the same undo. */
+export const NewUndo = Type.Object({ id: Uuid }, { additionalProperties: false });
+export type NewUndo = Static<typeof NewUndo>;
+
 /** What happened to rows: the answer to an edit, and what others learn of it. A null row was deleted. */
 export const ChangeNotice = Type.Object({
   sequence: Type.Integer(),
@@ -100,5 +104,9 @@ export type ChangeNotice = Static<typeof ChangeNotice>;
 /** One line of a project's history. */
 export const HistoryEntry = Type.Object({
   id: Uuid, sequence: Type.Integer(), at: Type.String(), by: Type.String(), summary: Type.String(), rows: Type.Integer(),
+  /** The entry that this one took back. */
+  undoes: nullable(Uuid),
+  /** The entry that took this one back and stands. */
+  undoneBy: nullable(Type.Object({ id: Uuid, at: Type.String(), by: Type.String() })),
 });
 export type HistoryEntry = Static<typeof HistoryEntry>;
