@@ -1,57 +1,59 @@
-import type { Electrics, LaneContext } from './assess-context.ts';
+import type { LaneContext } from './assess-context.ts';
 import { surfaceFinding, unstatedZones, zoneFinding } from './area/zone.ts';
-import type { Finding, Severity } from './findings.ts';
+import type { Design, Dispenser } from './design.ts';
+import type { DesignIndex } from './design-index.ts';
+import type { Finding } from './findings.ts';
 import { addressFindings } from './hardware/address.ts';
-import { channelFindings, loadFindings } from './hardware/load-findings.ts';
-import { supplyFindings } from './hardware/supply-findings.ts';
-import { laneMappingFindings, moduleMappingFindings } from './mapping/mapping-findings.ts';
+import { channelFindings } from './hardware/load-findings.ts';
+import { doubleSignals, laneMappingFindings } from './mapping/mapping-findings.ts';
 import { spareFindings } from './mapping/spare.ts';
 import { tagFindings } from './mapping/tag-findings.ts';
-import { protectionFindings } from './wiring/protection-findings.ts';
 import { signalFindings } from './wiring/signal-findings.ts';
-import { laneCableFindings, trunkFindings, voltageFindings } from './wiring/voltage-findings.ts';
+import { laneCableFindings, voltageFindings } from './wiring/voltage-findings.ts';
 
-/** Findings of one lane. */
-export function laneFindings(lane: LaneContext): Finding[] {
-  const point = lane.index.points.get(lane.dispenser.pointId);
-  const area = point ? [zoneFinding(point, lane.dispenser.id, lane.type), surfaceFinding(point, lane.dispenser.id, lane.type)] : [];
-  return [
-    ...laneMappingFindings(lane),
-    ...laneCableFindings(lane),
-    ...voltageFindings(lane),
-    ...channelFindings(lane),
-    ...signalFindings(lane),
-    ...area.filter((finding) => finding !== null),
-  ];
+/** Adds the findings of one lane's chain. */
+export function laneFindings(lane: LaneContext, findings: Finding[]): void {
+  laneMappingFindings(lane, findings);
+  laneCableFindings(lane, findings);
+  voltageFindings(lane, findings);
+  channelFindings(lane, findings);
+  signalFindings(lane, findings);
+  const { point, dispenser, type } = lane.rows;
+  if (!point) return;
+  for (const finding of [zoneFinding(point, dispenser.id, type), surfaceFinding(point, dispenser.id, type)]) if (finding) findings.push(finding);
 }
 
-/** Findings of everything that is not one lane. */
-export function placeFindings(electrics: Electrics): Finding[] {
-  const { index } = electrics;
-  const findings = [
-    ...loadFindings(electrics),
-    ...supplyFindings(electrics),
-    ...addressFindings(index),
-    ...moduleMappingFindings(index),
-    ...spareFindings(index),
-    ...tagFindings(index),
-    ...unstatedZones(index),
-  ];
-  for (const circuit of electrics.circuits.values()) findings.push(...protectionFindings(circuit), ...trunkFindings(circuit));
-  return findings;
+interface DesignCheck {
+  readonly check: (index: DesignIndex) => Finding[];
+  /** The collections whose rows it looks at; of dispensers only id, point and cable tag. */
+  readonly reads: readonly (keyof Design)[];
 }
 
-const ORDER: Readonly<Record<Severity, number>> = { error: 0, warning: 1, note: 2 };
+/** Checks that look at a design as a whole. */
+const DESIGN_CHECKS: readonly DesignCheck[] = [
+  { check: addressFindings, reads: ['modules', 'moduleTypes', 'controllers'] },
+  { check: doubleSignals, reads: ['assignments', 'dispensers', 'points'] },
+  { check: spareFindings, reads: ['project', 'modules', 'moduleTypes', 'controllers', 'cabinets', 'assignments'] },
+  { check: tagFindings, reads: ['dispensers', 'points', 'cableNodes', 'cabinets', 'supplies', 'modules', 'controllers'] },
+  { check: unstatedZones, reads: ['project', 'points', 'dispensers'] },
+];
 
-/** Sorts in place: errors first, then warnings, then notes; by code, subject label and key. */
-export function sortFindings(findings: Finding[]): void {
-  findings.sort(
-    (a, b) =>
-      ORDER[a.severity] - ORDER[b.severity] || compare(a.code, b.code) || compare(a.subject.label, b.subject.label) || compare(a.key, b.key),
-  );
+/** What the checks of the whole found, check by check. */
+export interface DesignFindings {
+  readonly design: Design;
+  readonly findings: readonly (readonly Finding[])[];
 }
 
-/** By code units: the same order on every machine. */
-function compare(a: string, b: string): number {
-  return a < b ? -1 : a > b ? 1 : 0;
+/** Findings of the design as a whole; those of a check whose collections are the same arrays are taken over. */
+export function designFindings(index: DesignIndex, previous: DesignFindings | null): DesignFindings {
+  const { design } = index;
+  const sameNames = previous !== null && sameDispenserNames(previous.design.dispensers, design.dispensers);
+  const isSame = (name: keyof Design): boolean => previous?.design[name] === design[name] || (name === 'dispensers' && sameNames);
+  const findings = DESIGN_CHECKS.map(({ check, reads }, i) => (previous && reads.every(isSame) ? previous.findings[i] : check(index)));
+  return { design, findings };
+}
+
+/** Whether dispensers have the same names in the same order: all that checks of the whole read of them. */
+function sameDispenserNames(a: readonly Dispenser[], b: readonly Dispenser[]): boolean {
+  return a.length === b.length && a.every((d, i) => d === b[i] || (d.id === b[i].id && d.pointId === b[i].pointId && d.cableTag === b[i].cableTag));
 }

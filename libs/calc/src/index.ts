@@ -1,7 +1,7 @@
 export type * from './design.ts';
 export type * from './findings.ts';
 export type * from './assessment.ts';
-export { assess } from './assess.ts';
+export { assess, createAssessor } from './assess.ts';
 export { FINDING_CODES, type FindingCode } from './finding-codes.ts';
 export * from './points/index.ts';
 export { groupIndexOf, groupKey, wiringBy } from './design-index.ts';

@@ -1,9 +1,9 @@
 import type { CircuitFigures } from '../assessment.ts';
 import { type Currents, total } from '../wiring/currents.ts';
-import type { CircuitSolution, LaneVoltages } from '../wiring/lane-voltages.ts';
+import type { CircuitSolution, LaneColumns } from '../wiring/lane-voltages.ts';
 import type { CircuitNetwork } from '../wiring/network.ts';
 import type { ShortCircuit } from '../wiring/protection.ts';
-import { type Load, sumLoads, worstSetOf, worstSum } from './load-sum.ts';
+import { type Load, type LoadSum, worstSetOf, worstSum } from './load-sum.ts';
 
 /** Run increments of a circuit's lanes through protection and supply, for sums under limits. */
 export function circuitLoads({ ids, circuit }: CircuitNetwork, currents: Currents): Load[] {
@@ -28,17 +28,16 @@ function everyLaneA(currents: Currents): number {
   return currents.addedSupply.reduce((sum, amps) => sum + Math.max(0, amps), standingA(currents));
 }
 
-/** Figures of one circuit; `largestPassingK` is worked out once everything else is known. */
+/** Figures of one circuit from the sum of its lanes' run increments; `largestPassingK` is worked out once everything else is known. */
 export function circuitFigures(
-  solution: CircuitSolution, lanes: readonly LaneVoltages[], short: ShortCircuit, tripA: number | null, largestPassingK: number | null,
+  solution: CircuitSolution, sum: LoadSum, { worst }: LaneColumns, short: ShortCircuit, tripA: number | null, largestPassingK: number | null,
 ): CircuitFigures {
   const { network, limit } = solution;
   const limitOf = () => limit;
-  const sum = sumLoads(circuitLoads(network, solution.worst.currents));
   const standing = standingA(solution.worst.currents);
   let lowest = -1;
-  lanes.forEach((lane, i) => {
-    if (lane.worst && (lowest < 0 || lane.worst.volts < lanes[lowest].worst!.volts)) lowest = i;
+  worst.forEach((figure, i) => {
+    if (figure && (lowest < 0 || figure.volts < worst[lowest]!.volts)) lowest = i;
   });
   return {
     dispensers: network.ids.length,
@@ -48,7 +47,7 @@ export function circuitFigures(
     allOnA: allOnA(solution),
     ratingA: network.circuit.protectionA,
     worstSet: worstSetOf(sum, limitOf),
-    lowestV: lowest < 0 ? null : lanes[lowest].worst!.volts,
+    lowestV: lowest < 0 ? null : worst[lowest]!.volts,
     lowestAt: lowest < 0 ? null : network.ids[lowest],
     shortCircuitA: short.amps,
     shortCircuitAt: short.at,

@@ -1,9 +1,8 @@
 import type { SolvedSupply } from '../wiring/supply-network.ts';
-import { type CircuitVoltages, solveVoltages } from '../wiring/worst-case.ts';
-import { circuitLoads, standingA } from './circuit-load.ts';
-import { failingLanes, faultFinder, type LimitTrial, TOLERANCE } from './limit-faults.ts';
-import { type LimitOf, sumLoads, worstSum } from './load-sum.ts';
-import { supplyLoad } from './supply-load.ts';
+import { type CircuitVoltages, keepsVoltages, solveVoltages } from '../wiring/worst-case.ts';
+import { standingA } from './circuit-load.ts';
+import { faultFinder, type LimitTrial, TOLERANCE } from './limit-faults.ts';
+import { type LimitOf, worstSum } from './load-sum.ts';
 
 type Passes = (k: number) => boolean;
 
@@ -18,10 +17,15 @@ type Passes = (k: number) => boolean;
 export function largestPassingK(trial: LimitTrial): number | null {
   const n = trial.solved.circuits[trial.at].network.ids.length;
   if (n === 0) return null;
-  const passes = currentsAreFixed(trial.solved, trial.at) ? fixedCheck(trial) : powerCheck(trial);
-  if (passes(n)) return n;
+  if (!currentsAreFixed(trial.solved, trial.at)) return largest(n, powerCheck(trial));
+  return largest(largest(n, loadCheck(trial)), voltageCheck(trial));
+}
+
+/** Largest number up to `most` that passes; 0 where none does. */
+function largest(most: number, passes: Passes): number {
+  if (most === 0 || passes(most)) return most;
   let good = 0;
-  let bad = n;
+  let bad = most;
   while (bad - good > 1) {
     const middle = (good + bad) >> 1;
     if (passes(middle)) good = middle;
@@ -32,17 +36,16 @@ export function largestPassingK(trial: LimitTrial): number | null {
 
 /** Whether no current depends on k: no constant power on the circuit, nor on one that shares its supply's resistance. */
 function currentsAreFixed({ worstCase: { networks, internalOhm } }: SolvedSupply, at: number): boolean {
-  return networks.every(({ loads }, c) => (c !== at && internalOhm === 0) || !loads.constantPower.includes(1));
+  return networks.every(({ hasConstantPower }, c) => (c !== at && internalOhm === 0) || !hasConstantPower);
 }
 
 /** Constant current: loads are look-ups, and other circuits only lose what the added current drops in the supply. */
-function fixedCheck(trial: LimitTrial): Passes {
-  const { solved, at, rated, supplyMayA, limitOf } = trial;
+function loadCheck(trial: LimitTrial): Passes {
+  const { solved, at, rated, load: supply, supplyMayA, limitOf } = trial;
   const { network, worst } = solved.circuits[at];
   const { circuit } = network;
-  const own = sumLoads(circuitLoads(network, worst.currents));
+  const own = supply.circuitSums[at];
   const standing = standingA(worst.currents);
-  const supply = supplyLoad(solved);
   const places = rated.get(circuit.id) ?? [];
   const spareV = othersSpareV(solved, at, worstSum(own, limitOf));
   return (k) => {
@@ -51,9 +54,14 @@ function fixedCheck(trial: LimitTrial): Passes {
     if (standing + addedA > circuit.protectionA + TOLERANCE) return false;
     if (supply.standingA + worstSum(supply.sum, limits) > supplyMayA + TOLERANCE) return false;
     if (!places.every(({ sum, ratingA }) => worstSum(sum, limits) <= ratingA + TOLERANCE)) return false;
-    if (spareV < solved.worstCase.internalOhm * addedA - TOLERANCE) return false;
-    return failingLanes(network, voltagesWith(trial, k)[at]).length === 0;
+    return spareV >= solved.worstCase.internalOhm * addedA - TOLERANCE;
   };
+}
+
+/** Constant current: the circuit's own voltages; what other circuits drop in the supply does not hang on this k. */
+function voltageCheck({ solved, at }: LimitTrial): Passes {
+  const { network, worst } = solved.circuits[at];
+  return (k) => keepsVoltages(network, worst.upstream, solved.worstCase.volts, k, TOLERANCE);
 }
 
 /** What the lanes of other circuits may lose, V, counted from where none of this circuit's lanes runs; lanes too low even then left out. */
@@ -62,13 +70,14 @@ function othersSpareV({ circuits, worstCase: { internalOhm } }: SolvedSupply, at
   if (internalOhm === 0) return least;
   circuits.forEach(({ network, worst }, c) => {
     if (c === at) return;
-    network.minV.forEach((minV, i) => {
-      if (!network.known[i]) return;
-      for (const volts of network.fourCore[i] ? [worst.runV[i], worst.idleV[i]] : [worst.runV[i]]) {
-        const spare = volts - minV + internalOhm * addedA;
-        if (spare >= -TOLERANCE) least = Math.min(least, spare);
-      }
-    });
+    const { known, fourCore, minV } = network;
+    for (let i = 0; i < minV.length; i++) {
+      if (!known[i]) continue;
+      const runSpare = worst.runV[i] - minV[i] + internalOhm * addedA;
+      const idleSpare = fourCore[i] ? worst.idleV[i] - minV[i] + internalOhm * addedA : Infinity;
+      if (runSpare >= -TOLERANCE) least = Math.min(least, runSpare);
+      if (idleSpare >= -TOLERANCE) least = Math.min(least, idleSpare);
+    }
   });
   return least;
 }
@@ -87,5 +96,5 @@ function voltagesWith({ solved, at }: LimitTrial, k: number): CircuitVoltages[] 
     const [own] = solveVoltages({ ...worstCase, networks: [worstCase.networks[at]], limits: [k] });
     return circuits.map(({ worst }, c) => (c === at ? own : worst));
   }
-  return solveVoltages({ ...worstCase, limits: worstCase.limits.map((limit, c) => (c === at ? k : limit)), only: at });
+  return solveVoltages({ ...worstCase, limits: worstCase.limits.map((limit, c) => (c === at ? k : limit)) });
 }

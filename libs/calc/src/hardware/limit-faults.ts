@@ -5,6 +5,7 @@ import type { CircuitVoltages } from '../wiring/worst-case.ts';
 import { circuitLoads, standingA } from './circuit-load.ts';
 import { type LimitOf, sumLoads, worstSum } from './load-sum.ts';
 import type { RatedSum } from './loads.ts';
+import type { SupplyLoad } from './supply-load.ts';
 
 /** What a limit k of one circuit is tried against; the other circuits keep theirs. */
 export interface LimitTrial {
@@ -13,6 +14,7 @@ export interface LimitTrial {
   readonly at: number;
   /** Groups and modules that limit something, by the circuits whose lanes load them. */
   readonly rated: ReadonlyMap<string, readonly RatedSum[]>;
+  readonly load: SupplyLoad;
   /** Load that the supply may carry before the margin, A. */
   readonly supplyMayA: number;
   readonly limitOf: LimitOf;
@@ -41,7 +43,7 @@ export function failingLanes({ known, fourCore, minV }: CircuitNetwork, { runV, 
 
 /** Finds all that does not pass on a supply solved with a k, the loads taken from the currents so solved. */
 export function faultFinder(trial: LimitTrial): (voltages: readonly CircuitVoltages[], k: number) => Fault[] {
-  const { solved: { supply, circuits }, at, supplyMayA } = trial;
+  const { solved: { rows: { supply }, circuits }, at, supplyMayA } = trial;
   const networks = circuits.map(({ network }) => network);
   const { circuit } = networks[at];
   const places = placesOf(trial, networks);
@@ -62,7 +64,7 @@ export function faultFinder(trial: LimitTrial): (voltages: readonly CircuitVolta
     const motors = motorCurrents(networks, voltages);
     places.forEach(({ loads, sum, ratingA }, i) => {
       const now = sumLoads(loads.map((load) => ({ ...load, amps: motors.get(load.id) ?? load.amps })));
-      if (worstSum(now, limits) > ratingA + TOLERANCE) faults.push({ key: `place ${i}`, own: sum.byCircuit.has(circuit.id) });
+      if (worstSum(now, limits) > ratingA + TOLERANCE) faults.push({ key: `place ${i}`, own: sum.parts.some((part) => part.circuitId === circuit.id) });
     });
     return faults;
   };

@@ -1,38 +1,55 @@
-import type { Electrics, LaneContext } from '../assess-context.ts';
+import type { CircuitContext, LaneContext } from '../assess-context.ts';
 import type { LoadFigures } from '../assessment.ts';
 import type { Module, ModuleType } from '../design.ts';
-import { type DesignIndex, moduleTypeOf } from '../design-index.ts';
+import type { DesignIndex } from '../design-index.ts';
 import { type FindingCode, makeFinding } from '../finding-codes.ts';
 import type { Finding, SubjectKind } from '../findings.ts';
 import { ampsAgainstMaximum, formatAmps, formatCount } from '../format.ts';
+import { type Lane, laneTag, laneWiring, type ModulePlace } from '../lane-rows.ts';
+import { largestRunA } from '../wiring/lane-voltages.ts';
+import { limitOfCircuit } from '../wiring/supply-network.ts';
 import { relayOperations } from '../wiring/signals.ts';
-import { channelLoad, leastChannelA } from './loads.ts';
+import { channelLoad, leastChannelA } from './channel-load.ts';
+import type { ModuleLoads, ModuleRows } from './loads.ts';
 
 const TOLERANCE_A = 1e-9;
 
 /** Name of a module with its controller, `PLC1 DO1`. */
-export function moduleLabel(index: DesignIndex, module: Module): string {
-  return `${index.controllers.get(module.controllerId)?.name ?? ''} ${module.name}`.trim();
+export function moduleLabel({ controllers }: Pick<DesignIndex, 'controllers'>, module: Module): string {
+  return labelled(controllers.get(module.controllerId)?.name, module);
 }
 
-/** Groups and modules against their ratings, under the limits and with all on. */
-export function loadFindings(electrics: Electrics): Finding[] {
+/** The same where its controller is at hand. */
+export function placeLabel({ controller, module }: ModulePlace): string {
+  return labelled(controller?.name, module);
+}
+
+function labelled(controller: string | undefined, module: Module): string {
+  return `${controller ?? ''} ${module.name}`.trim();
+}
+
+/** The circuits of a module's lanes with their figures, by id. */
+type Circuits = ReadonlyMap<string, CircuitContext>;
+
+/** A module and its groups against their ratings, under the limits and with all on. */
+export function loadFindings(rows: ModuleRows, loads: ModuleLoads, circuits: Circuits): Finding[] {
   const findings: Finding[] = [];
-  const { index, hardware } = electrics;
-  for (const module of index.design.modules) {
-    const type = index.moduleTypes.get(module.typeId);
-    const figures = hardware.modules.get(module.id);
-    if (!type || !figures || type.kind !== 'output') continue;
-    const label = moduleLabel(index, module);
-    pushLoad(findings, electrics, figures, ['IO-05', 'IO-06'], { kind: 'module', id: module.id, label, word: 'module' });
-    for (let g = 0; ; g++) {
-      const group = hardware.groups.get(`${module.id}/${g}`);
-      if (!group) break;
-      const where = { kind: 'group' as const, id: `${module.id}/${g}`, label: `${label}, ${channelsText(type, g)}`, word: 'group' };
-      pushLoad(findings, electrics, group, ['IO-03', 'IO-04'], where);
-    }
+  const { module, type } = rows.place;
+  if (!type || type.kind !== 'output') return findings;
+  if (isOver(loads.module)) {
+    const place = { kind: 'module' as const, id: module.id, label: placeLabel(rows.place), word: 'module' };
+    findings.push(overLoad(rows, loads.module, loads.module.ratingA, circuits, ['IO-05', 'IO-06'], place));
   }
+  loads.groups.forEach((group, g) => {
+    if (!isOver(group)) return;
+    const place = { kind: 'group' as const, id: `${module.id}/${g}`, label: `${placeLabel(rows.place)}, ${channelsText(type, g)}`, word: 'group' };
+    findings.push(overLoad(rows, group, group.ratingA, circuits, ['IO-03', 'IO-04'], place));
+  });
   return findings;
+}
+
+function isOver(figures: LoadFigures): figures is LoadFigures & { readonly ratingA: number } {
+  return figures.ratingA !== null && figures.allOnA > figures.ratingA + TOLERANCE_A;
 }
 
 /** Channels of a group, `channels 0–7`. */
@@ -48,34 +65,34 @@ interface Place {
   readonly word: string;
 }
 
-function pushLoad(findings: Finding[], electrics: Electrics, figures: LoadFigures, codes: readonly [FindingCode, FindingCode], place: Place): void {
-  const { worstA, allOnA, ratingA } = figures;
-  if (ratingA === null || allOnA <= ratingA + TOLERANCE_A) return;
+function overLoad(
+  rows: ModuleRows, figures: LoadFigures, ratingA: number, circuits: Circuits, codes: readonly [FindingCode, FindingCode], place: Place,
+): Finding {
+  const { worstA, allOnA } = figures;
   const over = worstA > ratingA + TOLERANCE_A;
   const amps = over ? worstA : allOnA;
   const shown = `${ampsAgainstMaximum(amps)} in the ${place.word}`;
-  findings.push(
-    makeFinding(codes[over ? 0 : 1], place.kind, place.id, place.label, {
-      title: over ? `${shown}, rating ${formatAmps(ratingA)}` : `${shown} if all run at once, rating ${formatAmps(ratingA)}`,
-      detail: over
-        ? `Worst set under the limits: ${formatCount(figures.worstSet.length)} dispensers. With all on: ${ampsAgainstMaximum(allOnA)}.`
-        : `Under the limits it is ${ampsAgainstMaximum(worstA)}. The program alone keeps them: forcing or an online change bypasses it, and then only the output’s own protection holds.`,
-      remedy: over ? loadRemedy(electrics, figures, place) : 'Spread the dispensers so that all may run, or keep forcing under control.',
-      compared: [{ name: `load of the ${place.word}`, value: amps, limit: ratingA, unit: 'A' }],
-      dispenserIds: over ? figures.worstSet : [],
-    }),
-  );
+  return makeFinding(codes[over ? 0 : 1], place.kind, place.id, place.label, {
+    title: over ? `${shown}, rating ${formatAmps(ratingA)}` : `${shown} if all run at once, rating ${formatAmps(ratingA)}`,
+    detail: over
+      ? `Worst set under the limits: ${formatCount(figures.worstSet.length)} dispensers. With all on: ${ampsAgainstMaximum(allOnA)}.`
+      : `Under the limits it is ${ampsAgainstMaximum(worstA)}. The program alone keeps them: forcing or an online change bypasses it, and then only the output’s own protection holds.`,
+    remedy: over ? loadRemedy(rows, figures, ratingA, circuits, place) : 'Spread the dispensers so that all may run, or keep forcing under control.',
+    compared: [{ name: `load of the ${place.word}`, value: amps, limit: ratingA, unit: 'A' }],
+    dispenserIds: over ? figures.worstSet : [],
+  });
 }
 
 /** Names the largest k of the one circuit that loads the place, where a smaller one mends it. */
-function loadRemedy({ index, circuits, limitOf }: Electrics, { worstSet, ratingA, worstA }: LoadFigures, { word }: Place): string {
+function loadRemedy({ lanes }: ModuleRows, { worstSet, worstA }: LoadFigures, ratingA: number, circuits: Circuits, { word }: Place): string {
   const spread = `spread the dispensers over two ${word}s`;
-  const circuitIds = new Set(worstSet.map((id) => index.dispensers.get(id)?.circuitId ?? null));
-  const [circuitId] = circuitIds;
-  const circuit = circuitIds.size === 1 && circuitId !== null ? index.circuits.get(circuitId) : undefined;
+  const inSet = new Set(worstSet);
+  const placesOfSet = new Set(lanes.filter((lane) => lane !== null && inSet.has(lane.dispenser.id)).map((lane) => lane?.circuit ?? null));
+  const [place] = placesOfSet;
+  const circuit = placesOfSet.size === 1 ? place?.circuit : undefined;
   const largest = circuit && circuits.get(circuit.id)?.figures.largestPassingK;
-  if (circuit && largest && largest < limitOf(circuit.id)) return `Set k to ${largest} on ${circuit.name}, or ${spread}.`;
-  return worstA > (ratingA ?? 0) && worstSet.length > 1 ? `${capitalised(spread)}.` : `Choose a ${word} with a higher rating.`;
+  if (circuit && largest && largest < limitOfCircuit(circuit.concurrencyLimit)) return `Set k to ${largest} on ${circuit.name}, or ${spread}.`;
+  return worstA > ratingA && worstSet.length > 1 ? `${capitalised(spread)}.` : `Choose a ${word} with a higher rating.`;
 }
 
 function capitalised(text: string): string {
@@ -83,48 +100,46 @@ function capitalised(text: string): string {
 }
 
 /** One output channel: continuous rating, starting peak, and what a relay contact can stand. */
-export function channelFindings(lane: LaneContext): Finding[] {
-  const { index, dispenser, tag, voltages } = lane;
-  const control = index.control.get(dispenser.id);
-  const type = control && moduleTypeOf(index, control.moduleId);
-  const load = channelLoad(index, dispenser.id, voltages?.runA ?? null);
-  if (!control || !type || type.kind !== 'output' || !load) return [];
-  const about = (code: FindingCode, name: string, value: number, limit: number, unit: string, title: string, remedy: string, detail = '') =>
-    makeFinding(code, 'dispenser', dispenser.id, tag, {
-      title, remedy, detail, compared: [{ name, value, limit, unit }], dispenserIds: [dispenser.id],
-    });
-  const findings: Finding[] = [];
+export function channelFindings(lane: LaneContext, findings: Finding[]): void {
+  const { rows, circuit, column } = lane;
+  const type = rows.output?.type;
+  const wiring = laneWiring(rows);
+  const load = channelLoad(rows.type, wiring, circuit ? largestRunA(circuit.solution, column) : null);
+  if (!type || type.kind !== 'output' || !load) return;
   if (type.channelA !== null && load.amps > type.channelA + TOLERANCE_A) {
-    findings.push(about('IO-01', 'channel load', load.amps, type.channelA, 'A',
+    findings.push(channelFinding(rows, 'IO-01', { name: 'channel load', value: load.amps, limit: type.channelA, unit: 'A' },
       `${ampsAgainstMaximum(load.amps)} on the channel, rating ${formatAmps(type.channelA)}`, 'Map it to a module with a higher channel rating.'));
   }
   if (type.channelPeakA !== null && load.peakA !== null && load.peakA > type.channelPeakA + TOLERANCE_A) {
-    findings.push(about('IO-02', 'starting peak', load.peakA, type.channelPeakA, 'A',
+    findings.push(channelFinding(rows, 'IO-02', { name: 'starting peak', value: load.peakA, limit: type.channelPeakA, unit: 'A' },
       `${ampsAgainstMaximum(load.peakA)} when the motor starts, the channel stands ${formatAmps(type.channelPeakA)}`,
       'Map it to a module that stands the peak, or choose a four-core type.'));
   }
-  return type.technology === 'relay' ? [...findings, ...relayFindings(lane, type, leastChannelA(index, dispenser.id, load.amps), about)] : findings;
+  if (type.technology !== 'relay') return;
+  const { supply = null, supplyType = null } = rows.circuit ?? {};
+  relayFindings(lane, type, leastChannelA(rows.type, wiring, supply, supplyType, load.amps), findings);
 }
 
-function relayFindings(
-  { index, figures, dispenser }: LaneContext, type: ModuleType, leastA: number,
-  about: (code: FindingCode, name: string, value: number, limit: number, unit: string, title: string, remedy: string, detail?: string) => Finding,
-): Finding[] {
-  const findings: Finding[] = [];
+function channelFinding(rows: Lane, code: FindingCode, compared: Finding['compared'][number], title: string, remedy: string, detail = ''): Finding {
+  const { dispenser } = rows;
+  return makeFinding(code, 'dispenser', dispenser.id, laneTag(rows), { title, remedy, detail, compared: [compared], dispenserIds: [dispenser.id] });
+}
+
+function relayFindings({ rows, figures }: LaneContext, type: ModuleType, leastA: number, findings: Finding[]): void {
+  const { project, dispenser } = rows;
   if (type.minLoadA !== null && leastA < type.minLoadA - TOLERANCE_A) {
-    findings.push(about('SG-08', 'channel load', leastA, type.minLoadA, 'A',
+    findings.push(channelFinding(rows, 'SG-08', { name: 'channel load', value: leastA, limit: type.minLoadA, unit: 'A' },
       `${formatAmps(leastA, 'down')} on the relay contact, least load ${formatAmps(type.minLoadA)}`,
       'Map it to a transistor output.', 'Below its least load a contact may fail to close for good.'));
   }
-  const years = index.design.project.relayLifeYears;
+  const years = project.relayLifeYears;
   const pulses = dispenser.method === 'pulse' ? figures.plan?.pulsesPerYear : undefined;
   if (type.ratedOperations !== null && pulses !== undefined) {
     const operations = relayOperations(pulses, years);
     if (operations > type.ratedOperations) {
-      findings.push(about('SG-09', 'operations', operations, type.ratedOperations, '',
+      findings.push(channelFinding(rows, 'SG-09', { name: 'operations', value: operations, limit: type.ratedOperations, unit: '' },
         `${formatCount(Math.ceil(operations))} operations in ${years} years, rated ${formatCount(type.ratedOperations)}`,
         'Map it to a transistor output, or choose a larger dose.', `${formatCount(Math.ceil(pulses))} pulses a year.`));
     }
   }
-  return findings;
 }

@@ -1,13 +1,15 @@
 /** Loads that meet in one place (a group, a module, a supply), by the circuit whose limit k governs them. */
 export interface LoadSum {
-  readonly byCircuit: ReadonlyMap<string | null, CircuitLoad>;
+  readonly parts: readonly CircuitLoad[];
 }
 
+/** The loads that one circuit brings to a place. */
 export interface CircuitLoad {
+  readonly circuitId: string | null;
   /** Dispenser ids, largest load first. */
   readonly ids: readonly string[];
   /** prefix[m]: sum of the m largest, A. */
-  readonly prefix: Float64Array;
+  readonly prefix: readonly number[];
 }
 
 /** A load with the circuit that governs it; without a circuit no limit holds. */
@@ -22,33 +24,60 @@ export type LimitOf = (circuitId: string | null) => number;
 
 /** Sorts the loads of one place, so that the worst sum under any limits is a look-up. O(n log n). */
 export function sumLoads(loads: readonly Load[]): LoadSum {
-  const grouped = new Map<string | null, Load[]>();
+  if (loads.length === 0) return NO_LOADS;
+  const [{ circuitId }] = loads;
+  if (loads.every((load) => load.circuitId === circuitId)) return { parts: [circuitLoad(circuitId, loads.slice())] };
+  const byCircuit = new Map<string | null, Load[]>();
   for (const load of loads) {
-    const group = grouped.get(load.circuitId);
-    if (group) group.push(load);
-    else grouped.set(load.circuitId, [load]);
+    const own = byCircuit.get(load.circuitId);
+    if (own) own.push(load);
+    else byCircuit.set(load.circuitId, [load]);
   }
-  const byCircuit = new Map<string | null, CircuitLoad>();
-  for (const [circuitId, group] of grouped) {
-    group.sort((a, b) => b.amps - a.amps || (a.id < b.id ? -1 : 1));
-    const prefix = new Float64Array(group.length + 1);
-    group.forEach((load, i) => (prefix[i + 1] = prefix[i] + Math.max(0, load.amps)));
-    byCircuit.set(circuitId, { ids: group.map((load) => load.id), prefix });
+  return { parts: Array.from(byCircuit, ([id, own]) => circuitLoad(id, own)) };
+}
+
+const NO_LOADS: LoadSum = { parts: [] };
+
+/** Up to so many, sorting each into its place is quicker than a general sort; most lists arrive in order. */
+const FEW = 48;
+
+function circuitLoad(circuitId: string | null, loads: Load[]): CircuitLoad {
+  if (loads.length > FEW) loads.sort((a, b) => (lighter(a, b) ? 1 : -1));
+  else sortFew(loads);
+  const prefix = [0];
+  const ids: string[] = [];
+  for (let i = 0; i < loads.length; i++) {
+    ids.push(loads[i].id);
+    prefix.push(prefix[i] + Math.max(0, loads[i].amps));
   }
-  return { byCircuit };
+  return { circuitId, ids, prefix };
+}
+
+function sortFew(loads: Load[]): void {
+  for (let i = 1; i < loads.length; i++) {
+    const load = loads[i];
+    let at = i;
+    for (; at > 0 && lighter(loads[at - 1], load); at--) loads[at] = loads[at - 1];
+    loads[at] = load;
+  }
+}
+
+/** Whether a comes after b: lighter, or as heavy and later by id. */
+function lighter(a: Load, b: Load): boolean {
+  return a.amps < b.amps || (a.amps === b.amps && a.id > b.id);
 }
 
 /** Worst sum under the limits: for each circuit its k largest, A. */
-export function worstSum({ byCircuit }: LoadSum, limitOf: LimitOf): number {
+export function worstSum({ parts }: LoadSum, limitOf: LimitOf): number {
   let sum = 0;
-  for (const [circuitId, { prefix }] of byCircuit) sum += prefix[Math.min(limitOf(circuitId), prefix.length - 1)];
+  for (const { circuitId, prefix } of parts) sum += prefix[Math.min(limitOf(circuitId), prefix.length - 1)];
   return sum;
 }
 
 /** The dispensers in that set. */
-export function worstSetOf({ byCircuit }: LoadSum, limitOf: LimitOf): string[] {
+export function worstSetOf({ parts }: LoadSum, limitOf: LimitOf): string[] {
   const set: string[] = [];
-  for (const [circuitId, { ids }] of byCircuit) {
+  for (const { circuitId, ids } of parts) {
     const count = Math.min(limitOf(circuitId), ids.length);
     for (let i = 0; i < count; i++) set.push(ids[i]);
   }

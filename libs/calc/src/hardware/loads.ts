@@ -1,26 +1,27 @@
 import type { LoadFigures, ModuleFigures } from '../assessment.ts';
-import type { Assignment, Module, ModuleType } from '../design.ts';
-import { type DesignIndex, groupIndexOf, groupKey, grouped, typeOf, wiringOf } from '../design-index.ts';
-import { NOMINAL_V } from '../wiring/network.ts';
+import type { Assignment, ModuleType } from '../design.ts';
+import { groupIndexOf } from '../design-index.ts';
+import { type Lane, laneWiring, type ModulePlace } from '../lane-rows.ts';
+import { channelLoad } from './channel-load.ts';
 import { type LimitOf, type Load, type LoadSum, sumLoads, worstSetOf, worstSum } from './load-sum.ts';
-import { HIGHEST_UNSTATED_V, highestSupplyV } from '../wiring/supply-voltage.ts';
 
-/** What an output channel carries, A. */
-export interface ChannelLoad {
-  readonly amps: number;
-  /** When the motor starts; null where only a pulse input is driven. */
-  readonly peakA: number | null;
+/** The rows that a module's figures and findings read. */
+export interface ModuleRows {
+  readonly place: ModulePlace;
+  readonly assignments: readonly Assignment[];
+  /** The lane of each assignment; null: there is none. */
+  readonly lanes: readonly (Lane | null)[];
 }
 
-/** Loads of groups and modules with their sums kept, so that another k is a look-up. */
-export interface HardwareLoads {
-  readonly groups: ReadonlyMap<string, LoadFigures>;
-  readonly modules: ReadonlyMap<string, ModuleFigures>;
-  /** Output groups and modules that limit something. */
+/** Loads of a module and its groups with their sums kept, so that another k is a look-up. */
+export interface ModuleLoads {
+  readonly module: ModuleFigures;
+  readonly groups: readonly LoadFigures[];
+  /** What each circuit brings to the whole module. */
+  readonly loaded: LoadSum['parts'];
+  /** Those of module and groups that limit something. */
   readonly rated: readonly RatedSum[];
 }
-
-type AmpsOf = (dispenserId: string) => number | null;
 
 /** A group or module with its loads and what it may carry, A. */
 export interface RatedSum {
@@ -29,86 +30,89 @@ export interface RatedSum {
   readonly ratingA: number;
 }
 
-/**
- * Load on the output channel of a dispenser: two-core the motor's current with its starting peak,
- * four-core the current of the pulse input.
- *
- * @param runA largest current through the motor as the network says; null where it is in none
- * @returns null while type or wiring is unknown, or the device takes no pulse from an output
- */
-export function channelLoad(index: DesignIndex, dispenserId: string, runA: number | null): ChannelLoad | null {
-  const dispenser = index.dispensers.get(dispenserId);
-  const type = dispenser && typeOf(index, dispenser);
-  if (!dispenser || !type) return null;
-  const wiring = wiringOf(index, dispenser);
-  if (wiring === 'two-core') return { amps: runA ?? type.runA, peakA: type.peakA };
-  if (wiring === 'four-core' && type.controlInputA !== null) return { amps: type.controlInputA, peakA: null };
-  return null;
+/** What the networks say of the lanes' motors, by place in the design; NaN: in no network. */
+export interface MotorCurrents {
+  readonly runA: Float64Array;
+  readonly allOnRunA: Float64Array;
+  /** 1 where the network was not taken over from an earlier state. */
+  readonly solvedAnew: Uint8Array;
 }
 
 /**
- * Smallest current on the output channel while it is on, A: with constant power through the motor that at
- * the supply's highest voltage and no drop, else the one current there is.
- */
-export function leastChannelA(index: DesignIndex, dispenserId: string, amps: number): number {
-  const dispenser = index.dispensers.get(dispenserId);
-  const type = dispenser && typeOf(index, dispenser);
-  if (!type || type.load !== 'constant-power' || wiringOf(index, dispenser) !== 'two-core') return amps;
-  const circuit = dispenser.circuitId === null ? undefined : index.circuits.get(dispenser.circuitId);
-  const supply = circuit && index.supplies.get(circuit.supplyId);
-  const highest = supply ? highestSupplyV(supply, index.supplyTypes.get(supply.typeId)) : HIGHEST_UNSTATED_V;
-  return Math.min(amps, (type.runA * NOMINAL_V) / highest);
-}
-
-/**
- * Loads of every group and module: the worst case under the limits is, for each circuit, the k largest
+ * Loads of a module and its groups: the worst case under the limits is, for each circuit, the k largest
  * channel loads in that group. Inputs carry none; their channels are counted all the same.
  *
- * @param ampsOf load of a dispenser's channel under the limits, A
- * @param allOnOf the same with all on
+ * @param places of the lanes in the design
  */
-export function hardwareLoads(index: DesignIndex, ampsOf: AmpsOf, allOnOf: AmpsOf, limitOf: LimitOf): HardwareLoads {
-  const groups = new Map<string, LoadFigures>();
-  const modules = new Map<string, ModuleFigures>();
-  const rated: RatedSum[] = [];
-  for (const module of index.design.modules) {
-    const type = index.moduleTypes.get(module.typeId);
-    if (!type) continue;
-    const onModule = index.assignmentsByModule.get(module.id) ?? [];
-    const place = (assignments: readonly Assignment[], ratingA: number | null, channels: number): LoadFigures => {
-      const loads = loadsOf(index, assignments, type, ampsOf);
-      const sum = sumLoads(loads);
-      if (ratingA !== null && loads.length > 0) rated.push({ loads, sum, ratingA });
-      const allOnA = loadsOf(index, assignments, type, allOnOf).reduce((all, { amps }) => all + Math.max(0, amps), 0);
-      const used = new Set(assignments.map((a) => a.channel)).size;
-      return { worstA: worstSum(sum, limitOf), allOnA, ratingA, worstSet: worstSetOf(sum, limitOf), used, channels };
-    };
-    groupFigures(module, type, onModule, place, groups);
-    const whole = place(onModule, type.moduleA, type.channels);
-    modules.set(module.id, { ...whole, free: Math.max(0, type.channels - whole.used) });
-  }
-  return { groups, modules, rated };
-}
-
-function groupFigures(
-  module: Module, type: ModuleType, assignments: readonly Assignment[],
-  place: (assignments: readonly Assignment[], ratingA: number | null, channels: number) => LoadFigures, groups: Map<string, LoadFigures>,
-): void {
-  const byGroup = grouped(assignments, (a) => String(groupIndexOf(type, a.channel)));
+export function moduleLoads(type: ModuleType, { assignments, lanes }: ModuleRows, places: readonly number[], currents: MotorCurrents, limitOf: LimitOf): ModuleLoads {
   const perGroup = Math.max(1, type.channelsPerGroup);
-  for (let g = 0; g * perGroup < type.channels; g++) {
-    const channels = Math.min(perGroup, type.channels - g * perGroup);
-    groups.set(groupKey(module.id, g), place(byGroup.get(String(g)) ?? [], type.groupA, channels));
+  const groups: Drawn[] = [];
+  for (let first = 0; first < type.channels; first += perGroup) groups.push(nothingDrawn());
+  const whole = nothingDrawn();
+  for (let i = 0; i < assignments.length; i++) {
+    const assignment = assignments[i];
+    const group = groups[groupIndexOf(type, assignment.channel)] as Drawn | undefined;
+    whole.assignments.push(assignment);
+    group?.assignments.push(assignment);
+    const lane = lanes[i];
+    if (type.kind !== 'output' || assignment.purpose !== 'control' || !lane) continue;
+    const wiring = laneWiring(lane);
+    const load = channelLoad(lane.type, wiring, numberOrNull(currents.runA[places[i]]));
+    const allOn = channelLoad(lane.type, wiring, numberOrNull(currents.allOnRunA[places[i]]));
+    if (!load || !allOn) continue;
+    const drawn = { id: assignment.dispenserId, circuitId: lane.dispenser.circuitId, amps: load.amps };
+    draw(whole, drawn, allOn.amps);
+    if (group) draw(group, drawn, allOn.amps);
   }
+  const sums = groups.map((group) => sumLoads(group.loads));
+  const sum = sumLoads(whole.loads);
+  const figures = loadFigures(whole, sum, type.moduleA, type.channels, limitOf);
+  return {
+    module: { ...figures, free: Math.max(0, type.channels - figures.used) },
+    groups: groups.map((group, g) => loadFigures(group, sums[g], type.groupA, Math.min(perGroup, type.channels - g * perGroup), limitOf)),
+    loaded: sum.parts,
+    rated: [...groups.flatMap(({ loads }, g) => ratedSum(loads, sums[g], type.groupA)), ...ratedSum(whole.loads, sum, type.moduleA)],
+  };
 }
 
-function loadsOf(index: DesignIndex, assignments: readonly Assignment[], type: ModuleType, ampsOf: AmpsOf): Load[] {
-  const loads: Load[] = [];
-  if (type.kind !== 'output') return loads;
-  for (const { dispenserId, purpose } of assignments) {
-    const amps = purpose === 'control' ? ampsOf(dispenserId) : null;
-    const circuitId = index.dispensers.get(dispenserId)?.circuitId ?? null;
-    if (amps !== null) loads.push({ id: dispenserId, circuitId, amps });
+/** What is drawn from a module or a group of it. */
+interface Drawn {
+  readonly assignments: Assignment[];
+  readonly loads: Load[];
+  allOnA: number;
+}
+
+function nothingDrawn(): Drawn {
+  return { assignments: [], loads: [], allOnA: 0 };
+}
+
+function draw(from: Drawn, load: Load, allOnA: number): void {
+  from.loads.push(load);
+  from.allOnA += Math.max(0, allOnA);
+}
+
+function numberOrNull(value: number): number | null {
+  return Number.isNaN(value) ? null : value;
+}
+
+function loadFigures({ assignments, allOnA }: Drawn, sum: LoadSum, ratingA: number | null, channels: number, limitOf: LimitOf): LoadFigures {
+  return { worstA: worstSum(sum, limitOf), allOnA, ratingA, worstSet: worstSetOf(sum, limitOf), used: channelsUsed(assignments), channels };
+}
+
+function ratedSum(loads: readonly Load[], sum: LoadSum, ratingA: number | null): RatedSum[] {
+  return ratingA === null || loads.length === 0 ? [] : [{ loads, sum, ratingA }];
+}
+
+/** How many different channels are in use. */
+export function channelsUsed(assignments: readonly Assignment[]): number {
+  let mask = 0;
+  let used = 0;
+  for (const { channel } of assignments) {
+    if (!(channel >= 0 && channel < 32)) return new Set(assignments.map((a) => a.channel)).size;
+    const bit = 1 << channel;
+    if (mask & bit) continue;
+    mask |= bit;
+    used++;
   }
-  return loads;
+  return used;
 }

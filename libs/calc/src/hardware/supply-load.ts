@@ -16,7 +16,8 @@ export function deratedA(type: SupplyType, temperatureC: number): number {
 export interface SupplyLoad {
   /** Other standing load, idling dispensers and all on their own clock, A. */
   readonly standingA: number;
-  /** Run increments of all circuits on it. */
+  /** Run increments of each circuit on it, and of all. */
+  readonly circuitSums: readonly LoadSum[];
   readonly sum: LoadSum;
   /** Largest current of one dispenser on it, A; 0: none. */
   readonly largestA: number;
@@ -27,14 +28,16 @@ export interface SupplyLoad {
 }
 
 /** Gathers the load of a supply from its solved circuits. */
-export function supplyLoad({ supply, circuits }: SolvedSupply): SupplyLoad {
+export function supplyLoad({ rows: { supply }, circuits }: SolvedSupply): SupplyLoad {
+  const circuitSums = circuits.map(({ network, worst }) => sumLoads(circuitLoads(network, worst.currents)));
   let largestA = 0;
   for (const { worst: { currents: { alwaysReturn, addedSupply } } } of circuits) {
     for (let i = 0; i < alwaysReturn.length; i++) largestA = Math.max(largestA, alwaysReturn[i] + addedSupply[i]);
   }
   return {
     standingA: circuits.reduce((sum, { worst }) => sum + standingA(worst.currents), supply.otherLoadA),
-    sum: sumLoads(circuits.flatMap(({ network, worst }) => circuitLoads(network, worst.currents))),
+    circuitSums,
+    sum: { parts: circuitSums.flatMap(({ parts }) => parts) },
     largestA,
     allOnA: circuits.reduce((sum, solution) => sum + allOnA(solution), supply.otherLoadA),
     collapsed: circuits.some(({ worst }) => worst.collapsed),

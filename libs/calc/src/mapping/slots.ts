@@ -1,6 +1,6 @@
 import type { Assignment, Module, ModuleType } from '../design.ts';
-import { type DesignIndex, groupIndexOf, groupKey } from '../design-index.ts';
-import { channelLoad, leastChannelA } from '../hardware/loads.ts';
+import { type DesignIndex, groupIndexOf, groupKey, wiringBy } from '../design-index.ts';
+import { channelLoad, leastChannelA } from '../hardware/channel-load.ts';
 import type { Load } from '../hardware/load-sum.ts';
 import { NOMINAL_V } from '../wiring/network.ts';
 
@@ -64,11 +64,15 @@ export interface PlannedLoad extends Load {
 /** The load that a dispenser will be on an output; null where it takes no pulse from one. */
 export function plannedLoad(index: DesignIndex, dispenserId: string): PlannedLoad | null {
   const dispenser = index.dispensers.get(dispenserId);
-  const type = dispenser?.typeId != null ? index.dispenserTypes.get(dispenser.typeId) : undefined;
-  const atLowest = type?.load === 'constant-power' && type.minV > 0 ? (type.runA * NOMINAL_V) / type.minV : null;
-  const load = channelLoad(index, dispenserId, atLowest);
-  if (!load || !dispenser) return null;
-  return { id: dispenserId, circuitId: dispenser.circuitId, ...load, leastA: leastChannelA(index, dispenserId, load.amps) };
+  const type = dispenser?.typeId != null ? (index.dispenserTypes.get(dispenser.typeId) ?? null) : null;
+  if (!dispenser || !type) return null;
+  const wiring = wiringBy(dispenser, type);
+  const load = channelLoad(type, wiring, type.load === 'constant-power' && type.minV > 0 ? (type.runA * NOMINAL_V) / type.minV : null);
+  if (!load) return null;
+  const circuit = dispenser.circuitId === null ? undefined : index.circuits.get(dispenser.circuitId);
+  const supply = circuit && index.supplies.get(circuit.supplyId);
+  const leastA = leastChannelA(type, wiring, supply ?? null, (supply && index.supplyTypes.get(supply.typeId)) ?? null, load.amps);
+  return { id: dispenserId, circuitId: dispenser.circuitId, ...load, leastA };
 }
 
 function emptyGroups(index: DesignIndex, module: Module, type: ModuleType): GroupSlots[] {

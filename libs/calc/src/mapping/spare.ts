@@ -1,7 +1,8 @@
-import type { Assignment, ModuleType } from '../design.ts';
+import type { ModuleType } from '../design.ts';
 import { type DesignIndex, grouped } from '../design-index.ts';
 import { makeFinding } from '../finding-codes.ts';
 import type { Finding } from '../findings.ts';
+import { channelsUsed } from '../hardware/loads.ts';
 
 export type Kind = ModuleType['kind'];
 
@@ -32,7 +33,7 @@ export function channelCounts({ design, controllers, moduleTypes, assignmentsByM
     let used = 0;
     for (const module of modules) {
       channels += moduleTypes.get(module.typeId)!.channels;
-      used += distinctChannels(assignmentsByModule.get(module.id) ?? []);
+      used += channelsUsed(assignmentsByModule.get(module.id) ?? []);
     }
     const kind: Kind = key.startsWith('output/') ? 'output' : 'input';
     return { cabinetId: key.slice(kind.length + 1), kind, channels, used, spare: spareChannels(channels, design.project.sparePercent) };
@@ -55,8 +56,4 @@ export function spareFindings(index: DesignIndex): Finding[] {
     }));
   }
   return findings;
-}
-
-function distinctChannels(assignments: readonly Assignment[]): number {
-  return new Set(assignments.map((a) => a.channel)).size;
 }

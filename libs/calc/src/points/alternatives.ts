@@ -1,7 +1,7 @@
-import type { PulsePlan } from '../assessment.ts';
+import type { PointFigures, PulsePlan } from '../assessment.ts';
 import type { Dispenser, RankBy } from '../design.ts';
 import { demandOf } from './demand.ts';
-import { assessPoint } from './lubrication.ts';
+import { assessWithDemand } from './lubrication.ts';
 import { PLAN_CODES } from './plan-codes.ts';
 import type { PointContext } from './point-context.ts';
 
@@ -40,11 +40,11 @@ const DECIDED_HERE: ReadonlySet<string> = new Set([
 export function alternatives(ctx: PointContext, rankBy: RankBy): Alternatives {
   const { dispenser, type, point } = ctx;
   if (!dispenser || !type) return none('Choose the dispenser type.');
-  const { refusal } = demandOf(point, ctx.grease?.densityGPerCm3 ?? null);
-  if (refusal !== null) return none(refusal);
+  const demand = demandOf(point, ctx.grease?.densityGPerCm3 ?? null);
+  if (demand.refusal !== null) return none(demand.refusal);
   if (point.hoursPerDay === null) return none('Enter the hours that the machine runs on a running day.');
   const all = type.cartridgesUl.flatMap((cartridgeUl) =>
-    doses(type.doseMinUl, type.doseMaxUl, type.doseStepUl).map((doseUl) => tried(ctx, { ...dispenser, method: 'pulse', cartridgeUl, doseUl })));
+    doses(type.doseMinUl, type.doseMaxUl, type.doseStepUl).map((doseUl) => tried(ctx, demand, { ...dispenser, method: 'pulse', cartridgeUl, doseUl })));
   return {
     ranked: all.filter((each) => each.passes).sort(comparing(rankBy)).map((each, index) => ({ ...each, rank: index + 1 })),
     rejected: all.filter((each) => !each.passes),
@@ -52,8 +52,8 @@ export function alternatives(ctx: PointContext, rankBy: RankBy): Alternatives {
   };
 }
 
-function tried(ctx: PointContext, dispenser: Dispenser): Alternative {
-  const { plan, findings } = assessPoint({ ...ctx, dispenser });
+function tried(ctx: PointContext, demand: PointFigures, dispenser: Dispenser): Alternative {
+  const { plan, findings } = assessWithDemand({ ...ctx, dispenser }, demand);
   const reasons = findings.filter((each) => DECIDED_HERE.has(each.code)).map((each) => each.title);
   return {
     cartridgeUl: dispenser.cartridgeUl!,

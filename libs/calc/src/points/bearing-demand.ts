@@ -1,13 +1,16 @@
 import type { PointFigures } from '../assessment.ts';
 import type { BearingFactors, Point } from '../design.ts';
 import { formatNumber } from '../format.ts';
-import { demandFigures, refuse, refuseMissing, refuseNotPositive } from './demand-result.ts';
+import { demandFigures, isPositive, refuse, refuseMissing, refuseNotPositive } from './demand-result.ts';
 import { exact, minus, over, ratio, sqrtUp, times, toNumber, type Rational } from './exact.ts';
+import { certainCeil } from './whole-numbers.ts';
 
 /** Largest factor of the published table: 10 for the design of ball bearings, 1 for all others. */
 const FACTOR_MAX: Readonly<Record<keyof BearingFactors, number>> = {
   temperature: 1, contamination: 1, moisture: 1, vibration: 1, position: 1, design: 10,
 };
+
+const FACTOR_NAMES = Object.keys(FACTOR_MAX) as readonly (keyof BearingFactors)[];
 
 /** The bearing's data once nothing is blank: mm and rpm. */
 interface Bearing {
@@ -25,17 +28,33 @@ interface Bearing {
  */
 export function bearingDemand(point: Point, densityGPerCm3: number | null): PointFigures {
   const { boreMm, outsideMm, widthMm, speedRpm, factors } = point;
-  const missing = refuseMissing(
-    { 'the bore': boreMm, 'the outside diameter': outsideMm, 'the width': widthMm, 'the speed': speedRpm },
-    ', or state the demand',
-  );
-  if (missing) return missing;
+  if (boreMm === null || outsideMm === null || widthMm === null || speedRpm === null) return refuseBlank(point);
   if (densityGPerCm3 === null) return refuse('Choose the grease, whose density turns the mass into a volume, or state the demand.');
-  const bearing = { bore: boreMm!, outside: outsideMm!, width: widthMm!, rpm: speedRpm! };
+  const bearing = { bore: boreMm, outside: outsideMm, width: widthMm, rpm: speedRpm };
   const refused = refuseWrong(bearing, factors, densityGPerCm3);
   if (refused) return refused;
+  const certain = certainDemand(bearing, factors, densityGPerCm3);
+  if (certain !== null) return { demandUlPer1000h: certain, refusal: null };
   const hours = times(hoursBeforeFactors(bearing), factorK(factors));
   return hours.num > 0n ? demandEach(hours, bearing, densityGPerCm3) : refuseSpeed(bearing.bore, bearing.rpm);
+}
+
+function refuseBlank({ boreMm, outsideMm, widthMm, speedRpm }: Point): PointFigures {
+  return refuseMissing(
+    { 'the bore': boreMm, 'the outside diameter': outsideMm, 'the width': widthMm, 'the speed': speedRpm },
+    ', or state the demand',
+  )!;
+}
+
+/** The formula in doubles, where they tell for certain what the demand rounds up to; null near the end of its range and near whole numbers. */
+function certainDemand({ bore, outside, width, rpm }: Bearing, factors: BearingFactors, density: number): number | null {
+  const { temperature, contamination, moisture, vibration, position, design } = factors;
+  const speedTerm = 14e6 / (rpm * Math.sqrt(bore));
+  const hours = speedTerm - 4 * bore;
+  // A difference much smaller than its terms has lost the digits that decide.
+  if (!(hours > speedTerm * 0.01)) return null;
+  const factor = temperature * contamination * moisture * vibration * position * design;
+  return certainCeil((5000 * outside * width) / (density * factor * hours));
 }
 
 /** The formula's intermediate figures, for explanations: unrounded. */
@@ -76,17 +95,18 @@ function hoursBeforeFactors({ bore, rpm }: Bearing): Rational {
 }
 
 function factorK(factors: BearingFactors): Rational {
-  return times(...factorNames().map((name) => exact(factors[name])));
+  return times(...FACTOR_NAMES.map((name) => exact(factors[name])));
 }
 
 function refuseWrong(bearing: Bearing, factors: BearingFactors, density: number): PointFigures | null {
   const { bore, outside, width, rpm } = bearing;
-  const bad = refuseNotPositive({ bore, 'outside diameter': outside, width, speed: rpm, 'the density of the grease': density });
-  if (bad) return bad;
+  if (!(isPositive(bore) && isPositive(outside) && isPositive(width) && isPositive(rpm) && isPositive(density))) {
+    return refuseNotPositive({ bore, 'outside diameter': outside, width, speed: rpm, 'the density of the grease': density });
+  }
   if (outside <= bore) {
     return refuse(`Correct the bearing: outside diameter ${mm(outside)} is not above bore ${mm(bore)}.`);
   }
-  const factor = factorNames().find((name) => !(factors[name] > 0 && factors[name] <= FACTOR_MAX[name]));
+  const factor = FACTOR_NAMES.find((name) => !(factors[name] > 0 && factors[name] <= FACTOR_MAX[name]));
   return factor === undefined
     ? null
     : refuse(`Correct the ${factor} factor: ${factors[factor]} is not above 0 and at most ${FACTOR_MAX[factor]}, the range of the factor table.`);
@@ -107,6 +127,6 @@ function mm(value: number): string {
 }
 
 /** The six factors in the order of the table. */
-export function factorNames(): (keyof BearingFactors)[] {
-  return Object.keys(FACTOR_MAX) as (keyof BearingFactors)[];
+export function factorNames(): readonly (keyof BearingFactors)[] {
+  return FACTOR_NAMES;
 }

@@ -8,27 +8,23 @@ import type { PlanCheckContext } from './point-context.ts';
 const FAST_MM_PER_MIN = 150_000;
 
 /** What is not decided yet, each with its consequence; and a bearing that asks for care. */
-export function blankChecks(ctx: PlanCheckContext): Noticed[] {
-  const { dispenser } = ctx;
-  return [
-    ...demandChecks(ctx),
-    ...(dispenser ? dispenserBlanks(dispenser, ctx.type) : [blank(PLAN_CODES.noDispenser, 'No dispenser at the point', 'The point gets no grease from this design, and no lane.', 'Add a dispenser to the point.')]),
-  ];
+export function blankChecks(ctx: PlanCheckContext, noticed: Noticed[]): void {
+  demandChecks(ctx, noticed);
+  if (ctx.dispenser) dispenserBlanks(ctx.dispenser, ctx.type, noticed);
+  else noticed.push(blank(PLAN_CODES.noDispenser, 'No dispenser at the point', 'The point gets no grease from this design, and no lane.', 'Add a dispenser to the point.'));
 }
 
-function demandChecks({ point, figures, dispenser }: PlanCheckContext): Noticed[] {
-  const noticed: Noticed[] = [];
+function demandChecks({ point, figures, dispenser }: PlanCheckContext, noticed: Noticed[]): void {
   if (figures.refusal !== null) {
     noticed.push(blank(PLAN_CODES.demandUnknown, 'Demand is not known', 'Without it there is no interval, no life and no change date.', figures.refusal));
   }
   if (dispenser && point.hoursPerDay === null) {
     noticed.push(blank(PLAN_CODES.hoursBlank, 'Hours per day are blank', 'Without them there is no plan: life in days and change date cannot be told.', 'Enter the hours that the machine runs on a running day.'));
   }
-  return [...noticed, ...fastBearing(point)];
+  fastBearing(point, noticed);
 }
 
-function dispenserBlanks(dispenser: Dispenser, type: DispenserType | null): Noticed[] {
-  const noticed: Noticed[] = [];
+function dispenserBlanks(dispenser: Dispenser, type: DispenserType | null, noticed: Noticed[]): void {
   if (dispenser.typeId === null) {
     noticed.push(blank(PLAN_CODES.typeBlank, 'Dispenser type is blank', 'Currents, voltages, doses and run times of the lane are unknown and count nowhere.', 'Choose the dispenser type.'));
   }
@@ -45,14 +41,13 @@ function dispenserBlanks(dispenser: Dispenser, type: DispenserType | null): Noti
   if (dispenser.method === 'timed' && dispenser.periodMonths === null) {
     noticed.push(blank(PLAN_CODES.periodBlank, 'Period of the timed discharge is blank', 'Discharge and change date are unknown.', 'Choose the months in which the cartridge empties.'));
   }
-  return noticed;
 }
 
-function fastBearing({ demandWay, boreMm, outsideMm, speedRpm }: PlanCheckContext['point']): Noticed[] {
-  if (demandWay !== 'bearing' || boreMm === null || outsideMm === null || speedRpm === null) return [];
+function fastBearing({ demandWay, boreMm, outsideMm, speedRpm }: PlanCheckContext['point'], noticed: Noticed[]): void {
+  if (demandWay !== 'bearing' || boreMm === null || outsideMm === null || speedRpm === null) return;
   const speedFactor = (speedRpm * (boreMm + outsideMm)) / 2;
-  if (speedFactor <= FAST_MM_PER_MIN) return [];
-  return [{
+  if (speedFactor <= FAST_MM_PER_MIN) return;
+  noticed.push({
     code: PLAN_CODES.fastBearing,
     severity: 'note',
     title: `Speed factor ${formatNumber(speedFactor, 0)} mm/min, amount and interval need care above ${formatNumber(FAST_MM_PER_MIN)}`,
@@ -60,7 +55,7 @@ function fastBearing({ demandWay, boreMm, outsideMm, speedRpm }: PlanCheckContex
     source: 'common practice (article on lubrication practice)',
     remedy: 'Compare demand and grease with the bearing maker’s data; prefer a small dose.',
     compared: [{ name: 'speed factor', value: speedFactor, limit: FAST_MM_PER_MIN, unit: 'mm/min' }],
-  }];
+  });
 }
 
 function blank(code: string, title: string, detail: string, remedy: string): Noticed {

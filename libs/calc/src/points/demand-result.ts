@@ -23,9 +23,14 @@ export function refuseMissing(fields: Readonly<Record<string, number | null>>, i
   return missing.length === 0 ? null : refuse(`Give ${listed(missing)}${instead}.`);
 }
 
+/** Whether a value is a finite number above 0. */
+export function isPositive(value: number): boolean {
+  return value > 0 && value < Infinity;
+}
+
 /** Refuses a value that must be above 0, or null when all are. */
 export function refuseNotPositive(fields: Readonly<Record<string, number>>): PointFigures | null {
-  const name = Object.keys(fields).find((key) => !(fields[key] > 0) || !Number.isFinite(fields[key]));
+  const name = Object.keys(fields).find((key) => !isPositive(fields[key]));
   return name === undefined ? null : refuse(`Correct ${name}: ${fields[name]} is not above 0.`);
 }
 

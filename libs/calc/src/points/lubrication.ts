@@ -21,10 +21,15 @@ export interface PointAssessment {
  * computed is null and a finding says why.
  */
 export function assessPoint(ctx: PointContext): PointAssessment {
-  const figures = demandOf(ctx.point, ctx.grease?.densityGPerCm3 ?? null);
+  return assessWithDemand(ctx, demandOf(ctx.point, ctx.grease?.densityGPerCm3 ?? null));
+}
+
+/** The same where the point's demand is at hand: it does not depend on the dispenser. */
+export function assessWithDemand(ctx: PointContext, figures: PointFigures): PointAssessment {
+  const { project, point, dispenser, type, grease, waitBoundMs } = ctx;
   const plan = planOf(ctx, figures);
   const timed = timedOf(ctx, figures);
-  return { figures, plan, timed, findings: planFindings({ ...ctx, figures, plan, timed }) };
+  return { figures, plan, timed, findings: planFindings({ project, point, dispenser, type, grease, waitBoundMs, figures, plan, timed }) };
 }
 
 function planOf({ project, point, dispenser, type }: PointContext, figures: PointFigures): PulsePlan | null {

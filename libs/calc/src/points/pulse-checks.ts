@@ -6,30 +6,29 @@ import type { PlanCheckContext } from './point-context.ts';
 import { exactIntervalMs, pulsesPerCartridge, runTimeMs } from './pulse-plan.ts';
 
 /** Dose and interval of a dispenser that the controller pulses. */
-export function pulseChecks(ctx: PlanCheckContext): Noticed[] {
+export function pulseChecks(ctx: PlanCheckContext, noticed: Noticed[]): void {
   const { dispenser, type } = ctx;
-  if (!dispenser || !type || dispenser.method !== 'pulse' || dispenser.doseUl === null) return [];
-  return [
-    ...doseChecks(dispenser.doseUl, type),
-    ...wholeDose(dispenser.cartridgeUl, dispenser.doseUl, type),
-    ...intervalCheck(ctx, dispenser.doseUl, type),
-  ];
+  if (!dispenser || !type || dispenser.method !== 'pulse' || dispenser.doseUl === null) return;
+  doseChecks(dispenser.doseUl, type, noticed);
+  wholeDose(dispenser.cartridgeUl, dispenser.doseUl, type, noticed);
+  intervalCheck(ctx, dispenser.doseUl, type, noticed);
 }
 
-function doseChecks(doseUl: number, type: DispenserType): Noticed[] {
+function doseChecks(doseUl: number, type: DispenserType, noticed: Noticed[]): void {
   if (doseUl < type.doseMinUl || doseUl > type.doseMaxUl) {
     const range = `${formatVolume(type.doseMinUl)} to ${formatVolume(type.doseMaxUl)}`;
-    return [{
+    noticed.push({
       code: PLAN_CODES.doseRange,
       severity: 'error',
       title: `Dose ${formatVolume(doseUl)} is outside ${range}`,
       source: 'type data',
       remedy: `Choose a dose from ${range}, or another type.`,
       compared: [{ name: 'dose', value: doseUl, limit: doseUl < type.doseMinUl ? type.doseMinUl : type.doseMaxUl, unit: 'µL' }],
-    }];
+    });
+    return;
   }
-  if (doseUl % type.doseStepUl === 0) return [];
-  return [{
+  if (doseUl % type.doseStepUl === 0) return;
+  noticed.push({
     code: PLAN_CODES.doseStep,
     severity: 'error',
     title: `Dose ${cm3(doseUl)} is not a whole number of steps of ${cm3(type.doseStepUl)}`,
@@ -37,36 +36,36 @@ function doseChecks(doseUl: number, type: DispenserType): Noticed[] {
     source: 'type data',
     remedy: `Choose ${cm3(doseUl - (doseUl % type.doseStepUl))} or ${cm3(doseUl - (doseUl % type.doseStepUl) + type.doseStepUl)}.`,
     compared: [{ name: 'dose', value: doseUl, limit: type.doseStepUl, unit: 'µL' }],
-  }];
+  });
 }
 
-function wholeDose(cartridgeUl: number | null, doseUl: number, type: DispenserType): Noticed[] {
-  if (cartridgeUl === null || !(doseUl > 0) || pulsesPerCartridge(cartridgeUl, type.residualUl, doseUl) > 0) return [];
+function wholeDose(cartridgeUl: number | null, doseUl: number, type: DispenserType, noticed: Noticed[]): void {
+  if (cartridgeUl === null || !(doseUl > 0) || pulsesPerCartridge(cartridgeUl, type.residualUl, doseUl) > 0) return;
   const usable = Math.max(0, cartridgeUl - type.residualUl);
-  return [{
+  noticed.push({
     code: PLAN_CODES.noWholeDose,
     severity: 'error',
     title: `Cartridge gives ${formatVolume(usable)}, a dose takes ${formatVolume(doseUl)}`,
     source: 'type data',
     remedy: 'Choose a larger cartridge or a smaller dose.',
     compared: [{ name: 'usable volume', value: usable, limit: doseUl, unit: 'µL' }],
-  }];
+  });
 }
 
 /** Wait bound + run + recovery must fit between two pulses, and a schedule needs at least one slot. */
-function intervalCheck(ctx: PlanCheckContext, doseUl: number, type: DispenserType): Noticed[] {
+function intervalCheck(ctx: PlanCheckContext, doseUl: number, type: DispenserType, noticed: Noticed[]): void {
   const demand = ctx.figures.demandUlPer1000h;
-  if (demand === null || !(doseUl > 0)) return [];
+  if (demand === null || !(doseUl > 0)) return;
   const exactMs = exactIntervalMs(demand, doseUl);
   const slotMs = Math.max(1, ctx.project.slotMs ?? 1);
   const intervalMs = Math.floor(Math.floor(exactMs) / slotMs) * slotMs;
   const runMs = runTimeMs(doseUl, type);
   const waitMs = ctx.waitBoundMs ?? 0;
   const neededMs = Math.max(waitMs + runMs + type.recoveryMs, slotMs);
-  if (intervalMs >= neededMs) return [];
+  if (intervalMs >= neededMs) return;
   const given = intervalMs > 0 ? intervalMs : exactMs;
   const parts = `${waitMs > 0 ? `wait ${formatDuration(waitMs)}, ` : ''}run ${formatDuration(runMs)}, recovery ${formatDuration(type.recoveryMs)}`;
-  return [{
+  noticed.push({
     code: PLAN_CODES.intervalTooShort,
     severity: 'error',
     title: `Interval ${formatDuration(given)}, at least ${formatDuration(neededMs)} needed`,
@@ -74,7 +73,7 @@ function intervalCheck(ctx: PlanCheckContext, doseUl: number, type: DispenserTyp
     source: 'type data',
     remedy: intervalRemedy(ctx, doseUl, type),
     compared: [{ name: 'interval', value: given, limit: neededMs, unit: 'ms' }],
-  }];
+  });
 }
 
 function intervalRemedy({ waitBoundMs }: PlanCheckContext, doseUl: number, type: DispenserType): string {

@@ -2,12 +2,13 @@ import type { PulsePlan } from '../assessment.ts';
 import type { DispenserType } from '../design.ts';
 import { operatingHours } from './demand-result.ts';
 import { over, ratio, toNumber } from './exact.ts';
+import { decimalOf, floorOfProduct, productOver } from './whole-numbers.ts';
 
 /** Days of a year, so that twelve months of 30.4375 days make one. */
 export const YEAR_DAYS = 365.25;
-const HOUR_MS = 3_600_000n;
+const HOUR_MS = 3_600_000;
 /** 1,000 operating hours, ms. */
-const DEMAND_SPAN_MS = 1000n * HOUR_MS;
+const DEMAND_SPAN_MS = 1000 * HOUR_MS;
 
 export interface PulsePlanInput {
   /** Whole µL per 1,000 operating hours, above 0. */
@@ -38,7 +39,7 @@ export function pulsePlan(input: PulsePlanInput): PulsePlan | null {
   const intervalMs = intervalOf(input);
   const pulses = pulsesPerCartridge(input.cartridgeUl, type.residualUl, doseUl);
   if (intervalMs === 0 || pulses === 0 || !isRunningTime(hoursPerDay, daysPerWeek)) return null;
-  const lifeMs = Number(BigInt(pulses) * BigInt(intervalMs));
+  const lifeMs = pulses * intervalMs;
   const dayMs = operatingMsPerDay(hoursPerDay, daysPerWeek);
   const lifeDays = lifeMs / dayMs;
   const runMs = runTimeMs(doseUl, type);
@@ -58,7 +59,7 @@ export function pulsePlan(input: PulsePlanInput): PulsePlan | null {
 
 /** Interval before rounding, ms of operating time: 1,000 h × dose ÷ demand. */
 export function exactIntervalMs(demandUlPer1000h: number, doseUl: number): number {
-  return toNumber(ratio(DEMAND_SPAN_MS * whole(doseUl), whole(demandUlPer1000h)));
+  return productOver(DEMAND_SPAN_MS, whole(doseUl), whole(demandUlPer1000h));
 }
 
 /** Run time of the motor for a dose, ms: it grows with the dose, step by step. */
@@ -69,12 +70,16 @@ export function runTimeMs(doseUl: number, type: Pick<DispenserType, 'doseStepUl'
 /** ⌊(nominal − residual) ÷ dose⌋, never below 0. */
 export function pulsesPerCartridge(cartridgeUl: number, residualUl: number, doseUl: number): number {
   const usable = whole(cartridgeUl) - whole(residualUl);
-  return usable > 0n ? Number(usable / whole(doseUl)) : 0;
+  return usable > 0 ? Math.floor(usable / whole(doseUl)) : 0;
 }
 
 /** Operating time in a calendar day, on average, ms: hours per day × days per week ÷ 7. */
 export function operatingMsPerDay(hoursPerDay: number, daysPerWeek: number): number {
-  return toNumber(over(operatingHours(ratio(1n, 1n), hoursPerDay, daysPerWeek), ratio(1n, HOUR_MS)));
+  const hours = decimalOf(hoursPerDay);
+  const days = decimalOf(daysPerWeek);
+  const num = hours && days ? hours.num * days.num * HOUR_MS : Infinity;
+  if (hours && days && num <= Number.MAX_SAFE_INTEGER) return num / (hours.den * days.den * 7);
+  return toNumber(over(operatingHours(ratio(1n, 1n), hoursPerDay, daysPerWeek), ratio(1n, BigInt(HOUR_MS))));
 }
 
 /** Hours above 0 and at most 24, days above 0 and at most 7. */
@@ -83,19 +88,20 @@ export function isRunningTime(hoursPerDay: number, daysPerWeek: number): boolean
 }
 
 function intervalOf({ demandUlPer1000h, doseUl, slotMs }: PulsePlanInput): number {
-  const ms = (DEMAND_SPAN_MS * whole(doseUl)) / whole(demandUlPer1000h);
-  const slot = slotMs === null || slotMs <= 0 ? 1n : whole(slotMs);
-  return Number(ms - (ms % slot));
+  const ms = floorOfProduct(DEMAND_SPAN_MS, whole(doseUl), whole(demandUlPer1000h));
+  return slotMs === null || slotMs <= 0 ? ms : ms - (ms % whole(slotMs));
 }
 
 /** (exact − rounded) ÷ rounded, as a whole-number difference so that nothing cancels, %. */
 function overGreasing(demandUlPer1000h: number, doseUl: number, intervalMs: number): number {
-  const given = DEMAND_SPAN_MS * BigInt(doseUl);
-  const asked = BigInt(intervalMs) * BigInt(demandUlPer1000h);
-  return toNumber(ratio(100n * (given - asked), asked));
+  const given = DEMAND_SPAN_MS * doseUl;
+  const asked = intervalMs * demandUlPer1000h;
+  if (given <= Number.MAX_SAFE_INTEGER) return productOver(100, given - asked, asked);
+  const exactlyAsked = BigInt(intervalMs) * BigInt(demandUlPer1000h);
+  return toNumber(ratio(100n * (BigInt(DEMAND_SPAN_MS) * BigInt(doseUl) - exactlyAsked), exactlyAsked));
 }
 
-function whole(value: number): bigint {
+function whole(value: number): number {
   if (!Number.isSafeInteger(value)) throw new RangeError(`Not a whole number: ${value}`);
-  return BigInt(value);
+  return value;
 }

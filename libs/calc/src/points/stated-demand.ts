@@ -1,6 +1,6 @@
 import type { PointFigures } from '../assessment.ts';
 import type { Point, StatedPer } from '../design.ts';
-import { demandFigures, MONTH_DAYS, operatingHours, refuseMissing, refuseNotPositive, refuseRunningTime } from './demand-result.ts';
+import { demandFigures, isPositive, MONTH_DAYS, operatingHours, refuseMissing, refuseNotPositive, refuseRunningTime } from './demand-result.ts';
 import { exact, over, ratio, times, type Rational } from './exact.ts';
 
 const THOUSAND = ratio(1000n, 1n);
@@ -11,13 +11,17 @@ const THOUSAND = ratio(1000n, 1n);
  */
 export function statedDemand(point: Point): PointFigures {
   const { statedUl, statedPer, hoursPerDay, daysPerWeek } = point;
-  const missing = refuseMissing({ 'the demand': statedUl, ...(needsHours(statedPer) && { 'the hours per day': hoursPerDay }) }, '');
-  if (missing) return missing;
-  const bad = refuseNotPositive({ 'the demand': statedUl! })
-    ?? (needsHours(statedPer) ? refuseRunningTime(hoursPerDay!, daysPerWeek) : null);
+  const byHours = needsHours(statedPer);
+  if (statedUl === null || (byHours && hoursPerDay === null)) {
+    return refuseMissing({ 'the demand': statedUl, ...(byHours && { 'the hours per day': hoursPerDay }) }, '')!;
+  }
+  const bad = (isPositive(statedUl) ? null : refuseNotPositive({ 'the demand': statedUl }))
+    ?? (byHours ? refuseRunningTime(hoursPerDay!, daysPerWeek) : null);
   if (bad) return bad;
+  // As most demands are stated: nothing to divide, nothing to round.
+  if (statedPer === '1000h' && Number.isInteger(statedUl) && statedUl <= 1e12) return { demandUlPer1000h: statedUl, refusal: null };
   const hours = hoursIn(statedPer, hoursPerDay ?? 0, daysPerWeek);
-  return demandFigures(over(times(exact(statedUl!), THOUSAND), hours));
+  return demandFigures(over(times(exact(statedUl), THOUSAND), hours));
 }
 
 function needsHours(per: StatedPer): boolean {

@@ -4,9 +4,8 @@ import { PLAN_CODES } from './plan-codes.ts';
 import type { PlanCheckContext } from './point-context.ts';
 
 /** What is set against what the dispenser type can do. */
-export function typeChecks({ dispenser, type }: PlanCheckContext): Noticed[] {
-  if (!dispenser || !type) return [];
-  const noticed: Noticed[] = [];
+export function typeChecks({ dispenser, type }: PlanCheckContext, noticed: Noticed[]): void {
+  if (!dispenser || !type) return;
   if (dispenser.cartridgeUl !== null && !type.cartridgesUl.includes(dispenser.cartridgeUl)) {
     const fitting = type.cartridgesUl.map((ul) => formatVolume(ul)).join(', ');
     noticed.push({
@@ -28,26 +27,23 @@ export function typeChecks({ dispenser, type }: PlanCheckContext): Noticed[] {
       remedy: `Set the wiring to ${type.wiring}, or choose a ${dispenser.wiring} type.`,
     });
   }
-  return noticed;
 }
 
 /** Life of the cartridge and over-greasing against the project's policies, for pulses and timed discharge alike. */
-export function lifeChecks({ project, plan, timed }: PlanCheckContext): Noticed[] {
+export function lifeChecks({ project, plan, timed }: PlanCheckContext, noticed: Noticed[]): void {
   const result = plan ?? timed;
-  if (!result) return [];
+  if (!result) return;
   const pulsed = plan !== null;
-  return [
-    ...stayCheck(result.lifeDays, project.maxCartridgeDays, pulsed),
-    ...worthwhileCheck(result.lifeDays, project.minCartridgeDays, pulsed),
-    ...overGreasingCheck(result.overGreasingPercent, project.maxOverGreasingPercent, pulsed),
-  ];
+  stayCheck(result.lifeDays, project.maxCartridgeDays, pulsed, noticed);
+  worthwhileCheck(result.lifeDays, project.minCartridgeDays, pulsed, noticed);
+  overGreasingCheck(result.overGreasingPercent, project.maxOverGreasingPercent, pulsed, noticed);
 }
 
 /** Compared in whole days: a cartridge of twelve months (365.25 d) keeps a limit of 365 d. */
-function stayCheck(lifeDays: number, maxDays: number, pulsed: boolean): Noticed[] {
+function stayCheck(lifeDays: number, maxDays: number, pulsed: boolean, noticed: Noticed[]): void {
   const days = Math.floor(lifeDays);
-  if (days <= maxDays) return [];
-  return [{
+  if (days <= maxDays) return;
+  noticed.push({
     code: PLAN_CODES.lifeTooLong,
     severity: 'warning',
     title: `Cartridge stays ${formatDays(days)}, at most ${formatDays(maxDays)}`,
@@ -55,12 +51,12 @@ function stayCheck(lifeDays: number, maxDays: number, pulsed: boolean): Noticed[
     source: 'policy (common practice: twelve months)',
     remedy: pulsed ? 'Choose a smaller cartridge; see the alternatives.' : 'Choose a shorter period.',
     compared: [{ name: 'life', value: days, limit: maxDays, unit: 'd' }],
-  }];
+  });
 }
 
-function worthwhileCheck(lifeDays: number, minDays: number, pulsed: boolean): Noticed[] {
-  if (lifeDays >= minDays) return [];
-  return [{
+function worthwhileCheck(lifeDays: number, minDays: number, pulsed: boolean, noticed: Noticed[]): void {
+  if (lifeDays >= minDays) return;
+  noticed.push({
     code: PLAN_CODES.lifeTooShort,
     severity: 'warning',
     title: `Cartridge lasts ${formatDays(lifeDays)}, at least ${formatDays(minDays)} is worthwhile`,
@@ -68,12 +64,12 @@ function worthwhileCheck(lifeDays: number, minDays: number, pulsed: boolean): No
     source: 'policy',
     remedy: pulsed ? 'Choose a larger cartridge, or a second dispenser at the point.' : 'Choose a longer period or a larger cartridge.',
     compared: [{ name: 'life', value: lifeDays, limit: minDays, unit: 'd' }],
-  }];
+  });
 }
 
-function overGreasingCheck(percent: number | null, maxPercent: number, pulsed: boolean): Noticed[] {
-  if (percent === null || percent <= maxPercent) return [];
-  return [{
+function overGreasingCheck(percent: number | null, maxPercent: number, pulsed: boolean, noticed: Noticed[]): void {
+  if (percent === null || percent <= maxPercent) return;
+  noticed.push({
     code: PLAN_CODES.overGreasing,
     severity: 'warning',
     title: `${formatPercent(percent, 'up')} more grease than the demand, at most ${formatPercent(maxPercent)}`,
@@ -83,7 +79,7 @@ function overGreasingCheck(percent: number | null, maxPercent: number, pulsed: b
       ? 'Choose a larger dose, whose interval holds more slots, or shorter slots.'
       : 'Choose a longer period or a smaller cartridge, or let the controller pulse it.',
     compared: [{ name: 'over-greasing', value: percent, limit: maxPercent, unit: '%' }],
-  }];
+  });
 }
 
 /** The member of the list that is nearest to the value; the value itself when the list is empty. */

@@ -19,6 +19,8 @@ export interface BoxTree {
   /** 0 where a trunk on the way has no known resistance. */
   readonly known: Uint8Array;
   readonly problems: readonly BoxProblem[];
+  /** By station: the resistances shared with it, once somebody has asked for them. */
+  readonly shared: (Float64Array | undefined)[];
 }
 
 export interface BoxProblem {
@@ -49,6 +51,7 @@ export function buildBoxTree(nodes: readonly CableNode[], temperatureC: number):
     signalOhm: new Float64Array(size),
     known: new Uint8Array(size).fill(1),
     problems,
+    shared: new Array<Float64Array | undefined>(size).fill(undefined),
   };
   for (let s = 1; s < size; s++) {
     const node = ordered[s - 1];
@@ -66,14 +69,17 @@ export function buildBoxTree(nodes: readonly CableNode[], temperatureC: number):
 
 /**
  * Resistance of one conductor of the power pair that the way to `station` shares with the way to each
- * other station, Ω: one walk, O(stations).
+ * other station, Ω: one walk, O(stations), then kept.
  */
-export function sharedPowerOhm(tree: BoxTree, station: number, into: Float64Array): Float64Array {
+export function sharedPowerOhm(tree: BoxTree, station: number): Float64Array {
+  const kept = tree.shared[station];
+  if (kept) return kept;
   const { parent, powerOhm } = tree;
-  into.fill(-1);
-  for (let s = station; s >= 0; s = parent[s]) into[s] = powerOhm[s];
-  for (let s = 0; s < parent.length; s++) if (into[s] < 0) into[s] = into[parent[s]];
-  return into;
+  const ohm = new Float64Array(parent.length).fill(-1);
+  for (let s = station; s >= 0; s = parent[s]) ohm[s] = powerOhm[s];
+  for (let s = 0; s < parent.length; s++) if (ohm[s] < 0) ohm[s] = ohm[parent[s]];
+  tree.shared[station] = ohm;
+  return ohm;
 }
 
 function segmentOhm(node: CableNode, temperatureC: number, problems: BoxProblem[]): { power: number; signal: number } | null {

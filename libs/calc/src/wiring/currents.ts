@@ -12,6 +12,9 @@ export interface Currents {
   readonly addedSupply: Float64Array;
 }
 
+/** Constant currents ask for none. */
+const NO_VOLTAGES = new Float64Array(0);
+
 export function noCurrents(size: number): Currents {
   return {
     alwaysOut: new Float64Array(size),
@@ -41,6 +44,20 @@ export function fillCurrents(network: CircuitNetwork, runV: Float64Array, idleV:
     into.addedReturn[i] = added + (loads.pulseOnPlus[i] ? 0 : loads.controlA[i]);
     into.addedSupply[i] = added + loads.controlA[i];
   }
+}
+
+/**
+ * The currents of a circuit that has no constant power on it: they hang on no voltage, so every way of
+ * looking at the circuit shares them.
+ */
+export function fixedCurrents(network: CircuitNetwork, timedRun: boolean): Currents {
+  const key = timedRun ? 'timed' : 'resting';
+  const kept = network.fixedCurrents[key];
+  if (kept) return kept;
+  const currents = noCurrents(network.ids.length);
+  fillCurrents(network, NO_VOLTAGES, NO_VOLTAGES, timedRun, currents);
+  network.fixedCurrents[key] = currents;
+  return currents;
 }
 
 /** Current through the motor of lane i while it runs, A. */

@@ -1,13 +1,50 @@
+/** Up to so many, sorting each into its place is quicker than a heap. */
+const FEW = 24;
+
 /**
  * The `count` largest positive values, largest first; of equal ones the lower index first, so that the
- * same design always names the same set. O(n·log count) by a bounded heap.
+ * same design always names the same set.
  *
  * @returns their indices
  */
 export function largestPositive(values: Float64Array, count: number): Int32Array {
+  const into = new Int32Array(Math.max(0, Math.min(count, values.length)));
+  return into.subarray(0, selectLargest(values, values.length, count, into));
+}
+
+/**
+ * The same of the first `size` values, written into a buffer: O(n·count) for a few, else O(n·log count) by a
+ * bounded heap.
+ *
+ * @returns how many there are
+ */
+export function selectLargest(values: Float64Array, size: number, count: number, into: Int32Array): number {
+  if (count <= 0) return 0;
+  return count <= FEW ? selectFew(values, size, count, into) : selectMany(values, size, count, into);
+}
+
+/** Every positive value's index, ascending: what `largestPositive` gives where all are taken, unsorted. */
+export function allPositive(values: Float64Array): Int32Array {
+  const indices: number[] = [];
+  for (let i = 0; i < values.length; i++) if (values[i] > 0) indices.push(i);
+  return Int32Array.from(indices);
+}
+
+function selectFew(values: Float64Array, size: number, count: number, into: Int32Array): number {
+  let found = 0;
+  for (let i = 0; i < size; i++) {
+    const value = values[i];
+    if (!(value > 0) || (found === count && !(value > values[into[found - 1]]))) continue;
+    let at = found === count ? found - 1 : found++;
+    for (; at > 0 && value > values[into[at - 1]]; at--) into[at] = into[at - 1];
+    into[at] = i;
+  }
+  return found;
+}
+
+function selectMany(values: Float64Array, size: number, count: number, into: Int32Array): number {
   const heap: number[] = [];
-  if (count <= 0) return new Int32Array(0);
-  for (let i = 0; i < values.length; i++) {
+  for (let i = 0; i < size; i++) {
     if (!(values[i] > 0)) continue;
     if (heap.length < count) {
       heap.push(i);
@@ -18,14 +55,8 @@ export function largestPositive(values: Float64Array, count: number): Int32Array
     }
   }
   heap.sort((a, b) => values[b] - values[a] || a - b);
-  return Int32Array.from(heap);
-}
-
-/** Every positive value's index, ascending: what `largestPositive` gives where all are taken, unsorted. */
-export function allPositive(values: Float64Array): Int32Array {
-  const indices: number[] = [];
-  for (let i = 0; i < values.length; i++) if (values[i] > 0) indices.push(i);
-  return Int32Array.from(indices);
+  for (let i = 0; i < heap.length; i++) into[i] = heap[i];
+  return heap.length;
 }
 
 /** Whether a leaves the heap before b: smaller, or equal and later. */

@@ -1,7 +1,8 @@
-import type { Circuit, Dispenser } from '../design.ts';
-import { type DesignIndex, moduleTypeOf, typeOf, wiringOf } from '../design-index.ts';
+import type { CableNode, Circuit, Dispenser } from '../design.ts';
+import { type Lane, laneWiring } from '../lane-rows.ts';
 import { type BoxTree, buildBoxTree } from './box-tree.ts';
 import { ohmPerMetre } from './conductor.ts';
+import type { Currents } from './currents.ts';
 import { pulsePolarity } from './signals.ts';
 
 /**
@@ -14,7 +15,9 @@ import { pulsePolarity } from './signals.ts';
 export interface CircuitNetwork {
   readonly circuit: Circuit;
   readonly tree: BoxTree;
-  /** Dispenser ids; all columns below follow this order. */
+  /** All columns below follow this order. */
+  readonly lanes: readonly Lane[];
+  /** Their dispensers' ids. */
   readonly ids: readonly string[];
   readonly station: Int32Array;
   /** 1: four-core. */
@@ -28,6 +31,18 @@ export interface CircuitNetwork {
   readonly known: Uint8Array;
   readonly minV: Float64Array;
   readonly loads: LaneLoads;
+  /** Lanes by the station where their own cable begins, four-core and two-core apart. */
+  readonly groups: readonly StationGroup[];
+  readonly hasConstantPower: boolean;
+  /** Currents of a circuit without constant power, with and without the lanes on their own clock, once somebody has asked for them. */
+  readonly fixedCurrents: { timed: Currents | null; resting: Currents | null };
+}
+
+/** Lanes that see the same drop before their own cables. */
+export interface StationGroup {
+  readonly station: number;
+  readonly fourCore: boolean;
+  readonly lanes: readonly number[];
 }
 
 /** What the lanes draw, as columns: A for constant current, W for constant power. */
@@ -54,23 +69,25 @@ export const NOMINAL_V = 24;
  * one. A type's run current is taken as the whole current while it runs, its standing current as
  * including what its status output delivers.
  */
-export function buildNetwork(index: DesignIndex, circuit: Circuit, temperatureC: number): CircuitNetwork {
-  const dispensers = index.dispensersByCircuit.get(circuit.id) ?? [];
-  const tree = buildBoxTree(index.nodesByCircuit.get(circuit.id) ?? [], temperatureC);
-  const network = emptyNetwork(circuit, tree, dispensers);
-  dispensers.forEach((dispenser, i) => {
-    placeLane(network, index, dispenser, i, temperatureC);
-    loadLane(network, index, dispenser, i);
+export function buildNetwork(circuit: Circuit, nodes: readonly CableNode[], lanes: readonly Lane[], temperatureC: number): CircuitNetwork {
+  const columns = emptyColumns(circuit, buildBoxTree(nodes, temperatureC), lanes);
+  lanes.forEach((lane, i) => {
+    placeLane(columns, lane, i, temperatureC);
+    loadLane(columns, lane, i);
   });
-  return network;
+  const hasConstantPower = columns.loads.constantPower.includes(1);
+  return { ...columns, groups: stationGroups(columns), hasConstantPower, fixedCurrents: { timed: null, resting: null } };
 }
 
-function emptyNetwork(circuit: Circuit, tree: BoxTree, dispensers: readonly Dispenser[]): CircuitNetwork {
-  const n = dispensers.length;
+type Columns = Omit<CircuitNetwork, 'groups' | 'hasConstantPower' | 'fixedCurrents'>;
+
+function emptyColumns(circuit: Circuit, tree: BoxTree, lanes: readonly Lane[]): Columns {
+  const n = lanes.length;
   return {
     circuit,
     tree,
-    ids: dispensers.map((d) => d.id),
+    lanes,
+    ids: lanes.map((lane) => lane.dispenser.id),
     station: new Int32Array(n),
     fourCore: new Uint8Array(n),
     ownOhm: new Float64Array(n),
@@ -89,36 +106,48 @@ function emptyNetwork(circuit: Circuit, tree: BoxTree, dispensers: readonly Disp
   };
 }
 
-function placeLane(network: CircuitNetwork, index: DesignIndex, dispenser: Dispenser, i: number, temperatureC: number): void {
+function placeLane(network: Columns, lane: Lane, i: number, temperatureC: number): void {
   const { tree } = network;
+  const { dispenser } = lane;
   const station = dispenser.nodeId === null ? 0 : tree.stationOf.get(dispenser.nodeId);
   const ohm = ownCoreOhm(dispenser, temperatureC);
   network.station[i] = station ?? 0;
   network.ownOhm[i] = ohm ?? 0;
   network.ownMetres[i] = dispenser.cableLengthM ?? 0;
   network.known[i] =
-    station !== undefined && tree.known[station] && ohm !== null && dispenser.typeId !== null && wiringOf(index, dispenser) ? 1 : 0;
+    station !== undefined && tree.known[station] && ohm !== null && dispenser.typeId !== null && laneWiring(lane) ? 1 : 0;
 }
 
-function loadLane({ loads, fourCore, minV, outputDropV, known }: CircuitNetwork, index: DesignIndex, dispenser: Dispenser, i: number): void {
-  const type = typeOf(index, dispenser);
+function loadLane({ loads, fourCore, minV, outputDropV, known }: Columns, lane: Lane, i: number): void {
+  const { type, dispenser } = lane;
   if (!type) {
     known[i] = 0;
     return;
   }
   const fixedPower = type.load === 'constant-power';
   const factor = fixedPower ? NOMINAL_V : 1;
-  fourCore[i] = wiringOf(index, dispenser) === 'four-core' ? 1 : 0;
+  fourCore[i] = laneWiring(lane) === 'four-core' ? 1 : 0;
   loads.constantPower[i] = fixedPower ? 1 : 0;
   loads.timed[i] = dispenser.method === 'timed' ? 1 : 0;
   loads.idle[i] = fourCore[i] ? type.idleA * factor : 0;
   loads.run[i] = type.runA * factor;
   loads.controlA[i] = fourCore[i] && !loads.timed[i] ? (type.controlInputA ?? 0) : 0;
   minV[i] = type.minV;
-  const control = index.control.get(dispenser.id);
-  const output = control && moduleTypeOf(index, control.moduleId);
+  const output = lane.output?.type;
   loads.pulseOnPlus[i] = pulsePolarity(type, output) === 'sinking' ? 1 : 0;
   if (!fourCore[i]) outputDropV[i] = output?.dropV ?? 0;
+}
+
+function stationGroups({ station, fourCore, tree }: Columns): StationGroup[] {
+  const groups: (StationGroup & { lanes: number[] })[] = [];
+  // Two places a station: two-core, four-core.
+  const at = new Int32Array(2 * tree.parent.length).fill(-1);
+  for (let i = 0; i < station.length; i++) {
+    const key = 2 * station[i] + fourCore[i];
+    if (at[key] < 0) at[key] = groups.push({ station: station[i], fourCore: fourCore[i] === 1, lanes: [] }) - 1;
+    groups[at[key]].lanes.push(i);
+  }
+  return groups;
 }
 
 /** One core of the dispenser's own cable, Ω; null while length or section is unknown or not in the tables. */

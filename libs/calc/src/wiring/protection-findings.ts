@@ -3,7 +3,7 @@ import type { Circuit } from '../design.ts';
 import { type FindingCode, makeFinding } from '../finding-codes.ts';
 import type { Finding } from '../findings.ts';
 import { ampsAgainstMaximum, ampsAgainstMinimum, formatAmps } from '../format.ts';
-import { tagOf } from '../design-index.ts';
+import { laneTag } from '../lane-rows.ts';
 import { overloadText } from './protection.ts';
 
 interface Compared {
@@ -16,7 +16,7 @@ type Notice = (code: FindingCode, title: string, remedy: string, detail: string,
 
 /** Screening of a circuit's protection: load, tripping at the far end, what the supply can deliver. */
 export function protectionFindings(context: CircuitContext): Finding[] {
-  const { circuit, short } = context;
+  const { rows: { circuit }, short } = context;
   const findings: Finding[] = [];
   const notice: Notice = (code, title, remedy, detail, compared, dispenserIds = []) =>
     findings.push(makeFinding(code, 'circuit', circuit.id, circuit.name, { title, remedy, detail, compared: compared ? [compared] : [], dispenserIds }));
@@ -32,7 +32,7 @@ export function protectionFindings(context: CircuitContext): Finding[] {
   return findings;
 }
 
-function loadChecks({ index, circuit, figures, solution }: CircuitContext, notice: Notice): void {
+function loadChecks({ supply, rows: { circuit }, figures, solution }: CircuitContext, notice: Notice): void {
   if (solution.worst.collapsed) {
     notice('PR-08', 'The current of the circuit cannot be computed: it has no working point', 'Mend the voltage collapse first (VD-04).',
       `The loads take at least ${ampsAgainstMinimum(figures.worstA)}, which they would at the voltage without any drop. Nothing says yet that the protection carries them.`);
@@ -46,19 +46,20 @@ function loadChecks({ index, circuit, figures, solution }: CircuitContext, notic
   } else if (!solution.worst.collapsed && (figures.allOnA > figures.ratingA + 1e-9 || solution.allOn.collapsed)) {
     // Without a working point the true current with all on lies above what is known of it.
     const atLeast = solution.allOn.collapsed;
-    const overload = atLeast ? 'With all on the circuit has no working point.' : (overloadText(circuit, figures.allOnA, index.design.project.breakerDcFactor) ?? '');
+    const overload = atLeast ? 'With all on the circuit has no working point.' : (overloadText(circuit, figures.allOnA, supply.rows.project.breakerDcFactor) ?? '');
     notice('PR-05', `${atLeast ? `At least ${ampsAgainstMinimum(figures.allOnA)}` : ampsAgainstMaximum(figures.allOnA)} if all run at once, protection ${rated}`,
       'Keep forcing under control.', `Under the limit it is ${ampsAgainstMaximum(figures.worstA)}. ${overload}`,
       { name: 'current with all on', value: figures.allOnA, limit: figures.ratingA, unit: 'A' });
   }
 }
 
-function tripChecks({ index, circuit, figures, short }: CircuitContext, notice: Notice): void {
+function tripChecks({ supply, rows: { circuit, lanes }, figures, short }: CircuitContext, notice: Notice): void {
   const { tripA } = figures;
   if (tripA === null || short.amps === null || short.at === null || short.amps >= tripA) return;
   const compared = { name: 'smallest short-circuit current', value: short.amps, limit: tripA, unit: 'A' };
   const needs = ampsAgainstMaximum(tripA);
-  const at = tagOf(index, short.at);
+  const farthest = lanes.find((lane) => lane.dispenser.id === short.at);
+  const at = farthest ? laneTag(farthest) : short.at;
   if (short.limitedBySupply) {
     notice('PR-06', `The supply delivers ${ampsAgainstMinimum(short.amps)}, tripping at once takes ${needs}`,
       'Choose a smaller rating, a characteristic that trips earlier, electronic protection, or a supply that delivers more.',
@@ -66,7 +67,7 @@ function tripChecks({ index, circuit, figures, short }: CircuitContext, notice: 
     return;
   }
   const supplyFallsShort = (short.supplyA ?? Infinity) < tripA;
-  const temperature = index.design.project.tripTempC;
+  const temperature = supply.rows.project.tripTempC;
   const detail = `Short circuit at ${at}, lowest supply voltage, conductors at ${temperature} °C.`;
   if (circuit.protection === 'electronic') {
     notice('PR-07', `${ampsAgainstMinimum(short.amps)} at the far end, the protection takes ${needs}`,

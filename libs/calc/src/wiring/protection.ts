@@ -1,6 +1,6 @@
-import type { Circuit, SupplyType } from '../design.ts';
-import { type DesignIndex, moduleTypeOf } from '../design-index.ts';
+import type { Circuit, Project, SupplyType } from '../design.ts';
 import { ampsAgainstMaximum, formatAmps } from '../format.ts';
+import type { Lane } from '../lane-rows.ts';
 import { temperatureFactor } from './conductor.ts';
 import type { CircuitNetwork } from './network.ts';
 
@@ -66,9 +66,8 @@ export interface ShortCircuit {
  * @param network as built for voltages; its resistances are carried over to `tripTempC`
  */
 export function smallestShortCircuit(
-  index: DesignIndex, network: CircuitNetwork, lowestV: number, internalOhm: number, type: SupplyType | undefined,
+  { voltageTempC, tripTempC }: Project, network: CircuitNetwork, lowestV: number, internalOhm: number, type: SupplyType | undefined,
 ): ShortCircuit {
-  const { voltageTempC, tripTempC } = index.design.project;
   const hotter = temperatureFactor(tripTempC) / temperatureFactor(voltageTempC);
   const upstream = internalOhm + network.circuit.protectionOhm;
   const behindOutput: string[] = [];
@@ -76,7 +75,7 @@ export function smallestShortCircuit(
   let at: string | null = null;
   network.ids.forEach((id, i) => {
     if (!network.known[i]) return;
-    if (!network.fourCore[i] && limitsItself(index, id)) {
+    if (!network.fourCore[i] && limitsItself(network.lanes[i])) {
       behindOutput.push(id);
       return;
     }
@@ -93,8 +92,6 @@ export function loopOhm({ tree, station, ownOhm, fourCore }: CircuitNetwork, i: 
   return tree.powerOhm[s] + (fourCore[i] ? tree.powerOhm[s] : tree.signalOhm[s]) + 2 * ownOhm[i];
 }
 
-function limitsItself(index: DesignIndex, dispenserId: string): boolean {
-  const control = index.control.get(dispenserId);
-  const type = control && moduleTypeOf(index, control.moduleId);
-  return type !== undefined && type.shortCircuitA !== null;
+function limitsItself({ output }: Lane): boolean {
+  return output?.type != null && output.type.shortCircuitA !== null;
 }

@@ -1,6 +1,6 @@
 import { sharedPowerOhm } from './box-tree.ts';
 import type { Currents } from './currents.ts';
-import { allPositive, largestPositive } from './largest.ts';
+import { selectLargest } from './largest.ts';
 import type { CircuitNetwork } from './network.ts';
 
 /** Which shared conductors of the trunk count for a drop: +24 V, 0 V or both. */
@@ -26,68 +26,97 @@ export interface StationView {
   readonly conductors: Conductors;
   /** Drop by everything that always flows, V. */
   readonly alwaysV: number;
-  /** What each lane's running adds, V. A buffer that the next view overwrites. */
+  /** What each lane's running adds, V. */
   readonly addedV: Float64Array;
-  /** Shared resistance of one power conductor with each station, Ω. A buffer. */
+  /** Shared resistance of one power conductor with each station, Ω. */
   readonly sharedOhm: Float64Array;
-  /** The lanes that add most, largest first: one more than the limit, so that any one can be left out. Without a limit: all, in no order. */
+  /** No limit binds: all may run at once. */
+  readonly everyone: boolean;
+  /** What all of them add that add anything, V; only where `everyone`. */
+  readonly everyoneV: number;
+  /** The `found` lanes that add most, largest first: one more than the limit, so that any one can be left out. Empty where `everyone`. */
   readonly top: Int32Array;
+  readonly found: number;
   /** prefix[m]: sum of the m largest, V. */
   readonly prefix: Float64Array;
-  /** Place of each lane in `top`, −1 outside. A buffer. */
+  /** Place of each lane in `top`, −1 outside. */
   readonly rank: Int32Array;
 }
 
-/** Makes views of one circuit with buffers of its own; a view is good until the next one is made. */
-export function stationViewer(network: CircuitNetwork): (
-  currents: Currents, station: number, conductors: Conductors, limit: number, upstream: Upstream,
-) => StationView {
-  const n = network.ids.length;
-  const addedV = new Float64Array(n);
-  const rank = new Int32Array(n).fill(-1);
-  const sharedOhm = new Float64Array(network.tree.parent.length);
-  let previous: Int32Array = new Int32Array(0);
-  return (currents, station, conductors, limit, upstream) => {
-    sharedPowerOhm(network.tree, station, sharedOhm);
-    const alwaysV = addUp(network, currents, sharedOhm, conductors, upstream, addedV);
-    for (const i of previous) rank[i] = -1;
-    const top = limit >= n ? allPositive(addedV) : largestPositive(addedV, limit + 1);
-    previous = top;
-    const prefix = new Float64Array(top.length + 1);
-    top.forEach((lane, place) => {
-      rank[lane] = place;
-      prefix[place + 1] = prefix[place] + addedV[lane];
-    });
-    return { station, conductors, alwaysV, addedV, sharedOhm, top, prefix, rank };
-  };
+/** One view with its buffers serves all: it is good until the next one is made. */
+const view = {
+  station: 0, conductors: BOTH, alwaysV: 0, sharedOhm: new Float64Array(0) as Float64Array, everyone: false, everyoneV: 0, found: 0,
+  addedV: new Float64Array(0), top: new Int32Array(0), prefix: new Float64Array(1), rank: new Int32Array(0),
+};
+
+/** Looks at a circuit from one station. The view is overwritten by the next one. */
+export function viewStation(
+  network: CircuitNetwork, currents: Currents, station: number, conductors: Conductors, limit: number, upstream: Upstream,
+): StationView {
+  const size = network.ids.length;
+  for (let place = 0; place < view.found; place++) view.rank[view.top[place]] = -1;
+  if (view.addedV.length < size) growBuffers(size);
+  view.station = station;
+  view.conductors = conductors;
+  view.sharedOhm = sharedPowerOhm(network.tree, station);
+  view.everyone = limit >= size;
+  view.found = 0;
+  view.everyoneV = 0;
+  addUp(network, currents, conductors, upstream);
+  if (!view.everyone && limit > 0) rankLargest(size, limit + 1);
+  return view;
+}
+
+function growBuffers(size: number): void {
+  view.addedV = new Float64Array(size);
+  view.top = new Int32Array(size);
+  view.prefix = new Float64Array(size + 1);
+  view.rank = new Int32Array(size).fill(-1);
+}
+
+function rankLargest(size: number, count: number): void {
+  const { addedV, top, prefix, rank } = view;
+  view.found = selectLargest(addedV, size, count, top);
+  for (let place = 0; place < view.found; place++) {
+    rank[top[place]] = place;
+    prefix[place + 1] = prefix[place] + addedV[top[place]];
+  }
 }
 
 /** The `count` lanes other than `lane` that add most: their sum, V. */
-export function othersV({ top, prefix, rank, addedV }: StationView, lane: number, count: number): number {
+export function othersV({ everyone, everyoneV, found, prefix, rank, addedV }: StationView, lane: number, count: number): number {
+  if (everyone) return everyoneV - Math.max(0, addedV[lane]);
   const place = rank[lane];
-  if (place >= 0 && place <= count) return prefix[Math.min(count + 1, top.length)] - addedV[lane];
-  return prefix[Math.min(count, top.length)];
+  if (place >= 0 && place <= count) return prefix[Math.min(count + 1, found)] - addedV[lane];
+  return prefix[Math.min(count, found)];
 }
 
-/** The same lanes by index. */
-export function othersSet({ top, rank }: StationView, lane: number, count: number): Int32Array {
+/** The same lanes by index; only where a limit binds. */
+export function othersSet({ top, found, rank }: StationView, lane: number, count: number): number[] {
   const place = rank[lane];
-  if (place < 0 || place > count) return top.slice(0, Math.min(count, top.length));
-  return top.slice(0, Math.min(count + 1, top.length)).filter((other) => other !== lane);
+  const taken = Math.min(place < 0 || place > count ? count : count + 1, found);
+  const others: number[] = [];
+  for (let i = 0; i < taken; i++) if (top[i] !== lane) others.push(top[i]);
+  return others;
 }
 
+/** Fills what each lane adds at the station in view, and sums what always flows. */
 function addUp(
-  { station, ids }: CircuitNetwork, currents: Currents, shared: Float64Array, { plus, zero }: Conductors, upstream: Upstream,
-  addedV: Float64Array,
-): number {
-  const { alwaysOut, alwaysReturn, addedOut, addedReturn, addedSupply } = currents;
-  let alwaysV = upstream.otherDropV;
+  { station, ids }: CircuitNetwork, { alwaysOut, alwaysReturn, addedOut, addedReturn, addedSupply }: Currents, { plus, zero }: Conductors,
+  { sharedOhm: upstreamOhm, otherDropV }: Upstream,
+): void {
+  const { addedV, sharedOhm } = view;
+  let alwaysV = otherDropV;
+  let everyoneV = 0;
   for (let i = 0; i < ids.length; i++) {
-    const trunk = shared[station[i]];
+    const trunk = sharedOhm[station[i]];
     const returnOhm = zero * trunk;
     const outOhm = plus * trunk;
-    alwaysV += alwaysReturn[i] * (upstream.sharedOhm + returnOhm) + alwaysOut[i] * outOhm;
-    addedV[i] = addedSupply[i] * upstream.sharedOhm + addedReturn[i] * returnOhm + addedOut[i] * outOhm;
+    alwaysV += alwaysReturn[i] * (upstreamOhm + returnOhm) + alwaysOut[i] * outOhm;
+    const added = addedSupply[i] * upstreamOhm + addedReturn[i] * returnOhm + addedOut[i] * outOhm;
+    addedV[i] = added;
+    if (added > 0) everyoneV += added;
   }
-  return alwaysV;
+  view.alwaysV = alwaysV;
+  view.everyoneV = everyoneV;
 }

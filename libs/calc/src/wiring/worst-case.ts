@@ -1,7 +1,7 @@
-import { type Currents, fillCurrents, motorRunA, noCurrents, total } from './currents.ts';
+import { type Currents, fillCurrents, fixedCurrents, motorRunA, noCurrents, total } from './currents.ts';
 import { largestPositive } from './largest.ts';
 import type { CircuitNetwork } from './network.ts';
-import { BOTH, othersV, type StationView, stationViewer, type Upstream, ZERO_ONLY } from './station-view.ts';
+import { BOTH, othersV, type StationView, type Upstream, viewStation, ZERO_ONLY } from './station-view.ts';
 
 /** All circuits of one supply, and under which conditions they are looked at. */
 export interface SupplyCase {
@@ -16,8 +16,6 @@ export interface SupplyCase {
   readonly limits: readonly number[];
   /** Whether lanes on their own clock count as running. */
   readonly timedRun: boolean;
-  /** Only this network's voltages are wanted; the others are left out where they cannot act back on it. */
-  readonly only?: number;
 }
 
 export interface CircuitVoltages {
@@ -51,11 +49,11 @@ const MAX_ROUNDS = 2000;
  * Time: O(stations × lanes × log k) for each circuit and round.
  */
 export function solveVoltages(supply: SupplyCase): CircuitVoltages[] {
-  const states = supply.networks.map((network) => newState(network, supply.volts));
+  const states = supply.networks.map((network) => newState(network, supply.volts, supply.timedRun));
   const iterate = states.some((state) => state.hasConstantPower);
   for (let round = 0; round < MAX_ROUNDS; round++) {
-    for (const state of states) fillCurrents(state.network, state.runV, state.idleV, supply.timedRun, state.currents);
-    const moved = lowerVoltages(supply, states, iterate ? undefined : supply.only);
+    for (const state of states) if (state.hasConstantPower) fillCurrents(state.network, state.runV, state.idleV, supply.timedRun, state.currents);
+    const moved = lowerVoltages(supply, states);
     if (!iterate || moved < CONVERGED_V) return states.map((state, c) => resultOf(supply, state, c, state.fell));
     // Circuits without a common resistance stand and fall alone.
     if (states.every((state) => state.fell || !state.hasConstantPower)) break;
@@ -66,8 +64,6 @@ export function solveVoltages(supply: SupplyCase): CircuitVoltages[] {
 
 interface State {
   readonly network: CircuitNetwork;
-  readonly view: ReturnType<typeof stationViewer>;
-  readonly lanesAt: ReadonlyMap<number, readonly number[]>;
   readonly hasConstantPower: boolean;
   readonly runV: Float64Array;
   readonly idleV: Float64Array;
@@ -77,16 +73,14 @@ interface State {
   fell: boolean;
 }
 
-function newState(network: CircuitNetwork, volts: number): State {
+function newState(network: CircuitNetwork, volts: number, timedRun: boolean): State {
   const n = network.ids.length;
   return {
     network,
-    view: stationViewer(network),
-    lanesAt: lanesByStation(network),
-    hasConstantPower: network.loads.constantPower.includes(1),
+    hasConstantPower: network.hasConstantPower,
     runV: network.outputDropV.map((drop) => volts - drop),
     idleV: new Float64Array(n).fill(volts),
-    currents: noCurrents(n),
+    currents: network.hasConstantPower ? noCurrents(n) : fixedCurrents(network, timedRun),
     upstream: { sharedOhm: 0, otherDropV: 0 },
     moved: 0,
     fell: false,
@@ -94,12 +88,12 @@ function newState(network: CircuitNetwork, volts: number): State {
 }
 
 /** One round: every lane's worst drop with the present currents; the largest change of a voltage, V. */
-function lowerVoltages(supply: SupplyCase, states: readonly State[], only: number | undefined): number {
+function lowerVoltages(supply: SupplyCase, states: readonly State[]): number {
   const amps = states.map(({ currents }, c) => worstSupplyA(currents, supply.limits[c]));
   const allA = supply.otherLoadA + amps.reduce((sum, a) => sum + a, 0);
   let moved = 0;
   states.forEach((state, c) => {
-    if (state.fell || (only !== undefined && only !== c)) return;
+    if (state.fell) return;
     state.upstream = {
       sharedOhm: supply.internalOhm + state.network.circuit.protectionOhm,
       otherDropV: supply.internalOhm === 0 ? 0 : supply.internalOhm * (allA - amps[c]),
@@ -119,15 +113,11 @@ function worstSupplyA(currents: Currents, limit: number): number {
 }
 
 function lowerCircuit(state: State, volts: number, limit: number): number {
-  const { network, lanesAt, view, currents, upstream } = state;
+  const { network, currents, upstream } = state;
   let moved = 0;
-  for (const [station, lanes] of lanesAt) {
-    for (const conductors of [BOTH, ZERO_ONLY]) {
-      const wiring = conductors.plus;
-      if (!lanes.some((t) => network.fourCore[t] === wiring)) continue;
-      const at = view(currents, station, conductors, limit, upstream);
-      for (const t of lanes) if (network.fourCore[t] === wiring) moved = Math.max(moved, lowerLane(state, at, t, volts, limit));
-    }
+  for (const { station, fourCore, lanes } of network.groups) {
+    const at = viewStation(network, currents, station, fourCore ? BOTH : ZERO_ONLY, limit, upstream);
+    for (const t of lanes) moved = Math.max(moved, lowerLane(state, at, t, volts, limit));
   }
   return moved;
 }
@@ -162,6 +152,27 @@ export function ownRunDropV(network: CircuitNetwork, currents: Currents, t: numb
   return network.outputDropV[t] + (network.tree.signalOhm[network.station[t]] + 2 * own) * motorA;
 }
 
+/**
+ * Whether every lane of a circuit without constant power keeps its minimum with another limit; what lies
+ * before the circuit stays as it is.
+ *
+ * @param toleranceV under the minimum, V
+ */
+export function keepsVoltages(network: CircuitNetwork, upstream: Upstream, volts: number, limit: number, toleranceV: number): boolean {
+  const { known, minV } = network;
+  const currents = fixedCurrents(network, true);
+  for (const { station, fourCore, lanes } of network.groups) {
+    const at = viewStation(network, currents, station, fourCore ? BOTH : ZERO_ONLY, limit, upstream);
+    for (const t of lanes) {
+      if (!known[t]) continue;
+      const least = minV[t] - toleranceV;
+      if (volts - runningDropV(network, at, t, limit) - ownRunDropV(network, currents, t) < least) return false;
+      if (fourCore && volts - at.alwaysV - othersV(at, t, limit) - ownIdleDropV(network, currents, t) < least) return false;
+    }
+  }
+  return true;
+}
+
 function ownIdleDropV(network: CircuitNetwork, currents: Currents, t: number): number {
   return network.fourCore[t] ? 2 * network.ownOhm[t] * currents.alwaysReturn[t] : 0;
 }
@@ -169,19 +180,8 @@ function ownIdleDropV(network: CircuitNetwork, currents: Currents, t: number): n
 function resultOf(supply: SupplyCase, state: State, c: number, collapsed: boolean): CircuitVoltages {
   const { runV, idleV, currents, upstream, hasConstantPower, network } = state;
   // Without a working point the loads are stated as at the no-drop voltage.
-  if (collapsed) fillCurrents(network, network.outputDropV.map((drop) => supply.volts - drop), new Float64Array(runV.length).fill(supply.volts), supply.timedRun, currents);
-  const coupled = supply.internalOhm > 0 && supply.networks.some((n) => n.loads.constantPower.includes(1));
+  if (collapsed && hasConstantPower) fillCurrents(network, network.outputDropV.map((drop) => supply.volts - drop), new Float64Array(runV.length).fill(supply.volts), supply.timedRun, currents);
+  const coupled = supply.internalOhm > 0 && supply.networks.some((n) => n.hasConstantPower);
   const oneSet = supply.limits.every((k, i) => (coupled || i === c ? k >= supply.networks[i].ids.length : true));
   return { runV, idleV, currents, upstream, collapsed, exact: (!hasConstantPower && !coupled) || oneSet };
-}
-
-/** Lanes of each station that has any, in order. */
-export function lanesByStation(network: CircuitNetwork): Map<number, number[]> {
-  const lanes = new Map<number, number[]>();
-  network.station.forEach((station, i) => {
-    const here = lanes.get(station);
-    if (here) here.push(i);
-    else lanes.set(station, [i]);
-  });
-  return lanes;
 }
