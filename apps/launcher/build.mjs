@@ -26,6 +26,7 @@ const server = {
   build: () =>
     runOrFail('esbuild', inRoot('node_modules', '.bin', 'esbuild'), [
       'apps/server/src/server.ts',
+      'apps/server/src/task-worker.ts',
       '--bundle',
       '--platform=node',
       '--format=esm',
@@ -33,7 +34,7 @@ const server = {
       '--packages=external',
       '--sourcemap',
       '--log-level=warning',
-      `--outfile=${serverOutput}`,
+      `--outdir=${dirname(serverOutput)}`,
     ]),
 };
 

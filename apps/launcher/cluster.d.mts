@@ -20,5 +20,6 @@ export interface ClusterOptions {
 }
 
 export function startCluster(options?: ClusterOptions): Promise<Cluster>;
+export function runningCluster(dir: string, password: string): string | undefined;
 export function stopCluster(dir: string, options?: { readonly user?: string }): Promise<void>;
 export function removeAbandonedClusters(): Promise<void>;

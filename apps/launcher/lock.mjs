@@ -37,17 +37,28 @@ function claim(draft, path) {
   }
 }
 
-function refuseIfHeld(path, folder) {
+/**
+ * @param {string} folder data folder
+ * @returns {number | undefined} the process of the launcher that works on the folder, if one does
+ */
+export const holderOf = (folder) => holderBy(join(folder, 'launcher.lock'));
+
+function holderBy(path) {
   let holder;
   try {
     holder = JSON.parse(readIfThere(path) ?? 'null');
   } catch {
-    return;
+    return undefined;
   }
-  if (!holder || !isRunning(holder.pid) || holder.born !== birthOf(holder.pid)) return;
+  return holder && isRunning(holder.pid) && holder.born === birthOf(holder.pid) ? holder.pid : undefined;
+}
+
+function refuseIfHeld(path, folder) {
+  const pid = holderBy(path);
+  if (pid === undefined) return;
   throw new LaunchError(
-    `Lanewright runs already on this data folder (process ${holder.pid}): ${folder}\n` +
-      `Use the one that runs, stop it with Ctrl-C (or: kill ${holder.pid}), ` +
+    `Lanewright runs already on this data folder (process ${pid}): ${folder}\n` +
+      `Use the one that runs, stop it with Ctrl-C (or: kill ${pid}), ` +
       'or give this one a folder of its own: DATA_DIR=… PORT=… npm start',
   );
 }

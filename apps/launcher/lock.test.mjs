@@ -4,7 +4,7 @@ import { existsSync, mkdtempSync, readdirSync, rmSync, writeFileSync } from 'nod
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterEach, beforeEach, test } from 'node:test';
-import { lockFolder } from './lock.mjs';
+import { holderOf, lockFolder } from './lock.mjs';
 
 let folder = '';
 beforeEach(() => (folder = mkdtempSync(join(tmpdir(), 'lanewright-lock-'))));
@@ -16,6 +16,14 @@ test('a second launcher is told the process that runs', () => {
   release();
   lockFolder(folder)();
   assert.deepEqual(readdirSync(folder), []);
+});
+
+test('who holds a folder can be asked', () => {
+  assert.equal(holderOf(folder), undefined);
+  const release = lockFolder(folder);
+  assert.equal(holderOf(folder), process.pid);
+  release();
+  assert.equal(holderOf(folder), undefined);
 });
 
 test('the lock of a process that is gone is replaced', () => {

@@ -14,7 +14,7 @@ export const inRoot = (...parts) => join(root, ...parts);
 /** Built client, as the server hands it out. */
 export const clientOutput = inRoot('dist', 'client', 'browser');
 
-/** Built server, one file. */
+/** Built server; the entry of its thread for long work stands beside it. */
 export const serverOutput = inRoot('dist', 'server', 'server.js');
 
 /** Scripts of installed tools, to be run with `process.execPath`. */

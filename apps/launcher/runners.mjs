@@ -103,7 +103,9 @@ async function endToEnd({ folder }) {
 function playwright(folder, url, accounts) {
   const report = join(folder, 'e2e.json');
   const env = { BASE_URL: url, E2E_ACCOUNTS: JSON.stringify(accounts), PLAYWRIGHT_JSON_OUTPUT_NAME: report };
-  const args = [tools.playwright, 'test', '--reporter=list,json'];
+  // A part of them for those who work on it, for instance E2E_FILES=guide.
+  const files = (process.env.E2E_FILES ?? '').split(' ').filter(Boolean);
+  const args = [tools.playwright, 'test', ...files, '--reporter=list,json'];
   return withReport(args, report, (text) => fromPlaywright(JSON.parse(text)), env);
 }
 

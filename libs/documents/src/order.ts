@@ -3,6 +3,8 @@
  * has the same order on every machine.
  */
 export function naturalCompare(a: string, b: string): number {
+  // Most neighbours in a list share cabinet, controller and module.
+  if (a === b) return 0;
   const [left, right] = [partsOf(a), partsOf(b)];
   for (let i = 0; i < Math.min(left.length, right.length); i++) {
     const order = compareParts(left[i], right[i]);

@@ -1,6 +1,6 @@
 import type { IoCell, IoColumn, IoList } from '#documents';
 import { stringify } from 'csv-stringify';
-import { Readable } from 'node:stream';
+import { pipeline, Readable } from 'node:stream';
 import { guardText, markHeadings } from '../imports/reading/index.ts';
 
 export interface CsvOptions {
@@ -21,11 +21,12 @@ export function ioListCsv(list: IoList, { delimiter, decimal, bom }: CsvOptions)
     // Without it a lone line feed inside a text would pass unquoted.
     quoted_match: /[\r\n]/,
   });
-  return Readable.from(records(list, decimal)).pipe(writer);
+  // Joined both ways: a row that fails ends the writer with its error, a reader who leaves ends the rows.
+  return pipeline(Readable.from(records(list, decimal)), writer, () => undefined);
 }
 
 function* records({ columns, rows }: IoList, decimal: CsvOptions['decimal']): Generator<string[]> {
-  yield markHeadings(columns.map(({ heading }) => heading));
+  yield markHeadings(columns.map(({ heading }) => heading), decimal);
   for (const row of rows) yield [...row.map((cell, i) => cellText(cell, columns[i], decimal)), ''];
 }
 

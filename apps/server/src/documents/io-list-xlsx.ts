@@ -30,7 +30,8 @@ export async function writeIoListXlsx(list: IoList, path: string): Promise<void>
 
 function writeCabinet(sheet: SheetWriter, list: IoList, title: string, rows: IoList['rows']): void {
   const { columns } = list;
-  sheet.columns = columns.map((column) => ({ width: column.width, style: cellStyle(column) }));
+  const styles = columns.map(cellStyle);
+  sheet.columns = columns.map(({ width }, i) => ({ width, style: styles[i] }));
   const line = sheet.addRow([`${title} · ${list.project} · ${list.state} · ${list.date}`]);
   line.getCell(1).style = bookStyles.title;
   line.commit();
@@ -39,8 +40,23 @@ function writeCabinet(sheet: SheetWriter, list: IoList, title: string, rows: IoL
   headings.height = 32;
   headings.commit();
   sheet.autoFilter = { from: { row: HEADING_ROW, column: 1 }, to: { row: HEADING_ROW + rows.length, column: columns.length } };
-  for (const row of rows) sheet.addRow([...row]).commit();
+  for (const row of rows) writeRow(sheet, row, styles);
   sheet.commit();
+}
+
+/**
+ * Blank cells are left out: the column's style holds there. The others get the column's very style object, which
+ * the writer knows again; it would look at a copy for each cell anew.
+ */
+function writeRow(sheet: SheetWriter, cells: IoList['rows'][number], styles: readonly Partial<exceljs.Style>[]): void {
+  const row = sheet.addRow([]);
+  cells.forEach((value, i) => {
+    if (value === null) return;
+    const cell = row.getCell(i + 1);
+    cell.value = value;
+    cell.style = styles[i];
+  });
+  row.commit();
 }
 
 /** "@" is the text format: a designation that somebody edits stays a text. */

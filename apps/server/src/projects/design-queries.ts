@@ -1,9 +1,10 @@
 import { projects as projectResource, projectResources } from '#contract';
 import { projects } from '#schema';
-import { eq, sql } from 'drizzle-orm';
+import { eq, type SQL, sql } from 'drizzle-orm';
 import { catalogueJson, catalogueSize } from '../catalogue/catalogue-service.ts';
 import type { Tx } from '../platform/database.ts';
-import { jsonObject, jsonRows } from '../platform/editing/json-rows.ts';
+import { jsonRows } from '../platform/editing/json-rows.ts';
+import { columnsOf } from '../platform/editing/rows.ts';
 import { collectionNamed } from './collections.ts';
 
 /** Number of the project's last change and size of the catalogue: together they tell whether a design is the same. */
@@ -18,20 +19,28 @@ export async function findDesignStamp(tx: Tx, projectId: string): Promise<Design
   return stamp;
 }
 
-/** The whole design as JSON text, from one statement and so from one instant. */
+/**
+ * The whole design as JSON text, from one statement and so from one instant. Each collection comes as a text of
+ * its own, joined here: inside the database every further step would copy megabytes once more.
+ */
 export async function findDesign(tx: Tx, projectId: string): Promise<(DesignStamp & { readonly text: string }) | undefined> {
   const names = Object.keys(projectResources) as (keyof typeof projectResources)[];
-  const rows = names.map((name) => {
-    const { table, resource } = collectionNamed(name);
-    return [name, jsonRows(table, resource.Row, sql`project_id = ${projectId}`)] as const;
-  });
-  const document = jsonObject({
-    sequence: sql`p.sequence`,
-    project: sql`${jsonRows(projects, projectResource.Row, sql`id = ${projectId}`)} -> 0`,
-    catalogue: catalogueJson(),
-    ...Object.fromEntries(rows),
-  });
-  const [design] = await tx.execute<DesignStamp & { text: string }>(sql`
-    select p.sequence, ${catalogueSize()} as entries, ${document}::text as text from ${projects} p where p.id = ${projectId}`);
-  return design;
+  const texts = names.map((name) => sql`${rowTexts(name, projectId)} as ${sql.identifier(name)}`);
+  const [found] = await tx.execute<DesignStamp & Record<string, string>>(sql`
+    select p.sequence, ${catalogueSize()} as entries,
+      (${jsonRows(projects, projectResource.Row, sql`id = ${projectId}`)} -> 0)::text as project, ${catalogueJson()}::text as catalogue,
+      ${sql.join(texts, sql`, `)}
+    from ${projects} p where p.id = ${projectId}`);
+  if (!found) return undefined;
+  const collections = names.map((name) => `${JSON.stringify(name)}:[${found[name]}]`).join(',');
+  const { sequence, entries, project, catalogue } = found;
+  return { sequence, entries, text: `{"sequence":${sequence},"project":${project},"catalogue":${catalogue},${collections}}` };
+}
+
+/** The rows of a collection in the order of creation as JSON, without the brackets around them; faster than json_agg. */
+function rowTexts(name: keyof typeof projectResources, projectId: string): SQL {
+  const { table, resource } = collectionNamed(name);
+  const fields = Object.entries(columnsOf(table, resource.Row)).map(([field, column]) => sql`${sql.identifier(column.name)} as ${sql.identifier(field)}`);
+  return sql`(select coalesce(string_agg(row_to_json(r)::text, ','), '')
+    from (select ${sql.join(fields, sql`, `)} from ${table} where project_id = ${projectId} order by id) r)`;
 }

@@ -1,9 +1,6 @@
 import type { Request, Response } from 'express';
-import { promisify } from 'node:util';
-import { constants, gzip } from 'node:zlib';
-import { type Answer, JsonText } from './answer.ts';
+import { type Answer, compressed, JsonText } from './answer.ts';
 
-const compress = promisify(gzip);
 /** Below this, compressing costs more than it saves. */
 const WORTH_COMPRESSING = 4096;
 
@@ -14,11 +11,12 @@ export async function send(req: Request, res: Response, answer: Answer): Promise
     res.end();
     return;
   }
-  const text = answer.body instanceof JsonText ? answer.body.text : JSON.stringify(answer.body);
+  const json = answer.body instanceof JsonText ? answer.body : null;
+  const text = json?.text ?? JSON.stringify(answer.body);
   res.set('Content-Type', 'application/json; charset=utf-8').vary('Accept-Encoding');
   if (text.length < WORTH_COMPRESSING || !req.acceptsEncodings('gzip')) {
     res.end(text);
     return;
   }
-  res.set('Content-Encoding', 'gzip').end(await compress(text, { level: constants.Z_BEST_SPEED }));
+  res.set('Content-Encoding', 'gzip').end(await (json?.gzip() ?? compressed(text)));
 }

@@ -1,0 +1,2 @@
+/** A process that does nothing: what others need is measured above it. */
+export {};
