@@ -3,6 +3,7 @@ import express, { type Express, Router } from 'express';
 import { pinoHttp } from 'pino-http';
 import { authenticator } from './accounts/authenticate.ts';
 import type { Config } from './platform/config.ts';
+import { ByteCache } from './platform/byte-cache.ts';
 import { Database } from './platform/database.ts';
 import { Announcements } from './platform/events.ts';
 import { type ClientFiles, clientFiles } from './platform/http/client-files.ts';
@@ -14,7 +15,12 @@ import { openApiDocument } from './platform/http/openapi.ts';
 import type { Logger } from './platform/log.ts';
 import { NotFound, ProblemError } from './platform/problems.ts';
 import type { Services } from './platform/services.ts';
+import { TaskThread } from './platform/tasks/task-thread.ts';
 import { routes } from './routes.ts';
+
+const CACHE_BYTES = 200_000_000;
+/** Beside this file, both as sources and as built. */
+const TASK_WORKER = new URL(import.meta.url.endsWith('.ts') ? './task-worker.ts' : './task-worker.js', import.meta.url);
 
 /** One instance of the server, without a port. */
 export interface App {
@@ -24,14 +30,17 @@ export interface App {
 
 /** Joins the features to one server. Connects to the database; throws where that cannot be reached. */
 export async function createApp(config: Config, log: Logger): Promise<App> {
-  const database = new Database({ appUrl: config.databaseAppUrl, authUrl: config.databaseAuthUrl });
+  const urls = { appUrl: config.databaseAppUrl, authUrl: config.databaseAuthUrl };
+  const database = new Database(urls);
+  const tasks = new TaskThread(TASK_WORKER, urls);
   const announcements = new Announcements(config.databaseAppUrl);
   await announcements.start();
   const authenticate = authenticator(config.jwtSecret, database, announcements);
-  const services: Services = { config, database, announcements, log, authenticate };
+  const services: Services = { config, database, announcements, log, authenticate, tasks, cache: new ByteCache(CACHE_BYTES) };
   return {
     express: assemble(services, config.clientDir === null ? null : clientFiles(config.clientDir)),
     close: async () => {
+      await tasks.close();
       await Promise.all([announcements.close(), database.close()]);
     },
   };

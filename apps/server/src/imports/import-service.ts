@@ -1,17 +1,14 @@
 import { createHash } from 'node:crypto';
-import type { ImportPreview, ImportResult, ImportSettings } from '#contract';
-import { v7 as newId } from 'uuid';
+import type { ImportPreview, ImportResult, ImportSettings, ImportWork, RowFilter } from '#contract';
 import { type Context, withOrg } from '../platform/context.ts';
-import { NotFound, ProblemError, TooLarge } from '../platform/problems.ts';
-import { applyChangeSetIn } from '../projects/change-sets/apply-change-set.ts';
-import { loadDesignIn } from '../projects/load-design.ts';
-import { rowChangesOf } from './import-changes.ts';
-import { interpret, previewOf } from './import-preview.ts';
-import { findImport, findImportForUpdate, type ImportRow, insertImport, markCommitted } from './import-queries.ts';
-import { ImportRefusal, type RefusalCode } from './reading/index.ts';
+import { Conflict, NotFound } from '../platform/problems.ts';
+import type { Services } from '../platform/services.ts';
+import { deleteImport, findImportState, insertImport } from './import-queries.ts';
+import type { ImportInput, PreviewOutput } from './import-tasks.ts';
+import { findWork, type ImportKey, runTracked, wishToStop } from './import-work.ts';
+import { type PackedRows, pageText } from './packed-rows.ts';
 
 const KEPT_DAYS = 30;
-const TOO_LARGE: ReadonlySet<RefusalCode> = new Set(['too-large', 'too-many-rows', 'too-many-columns', 'cell-too-long']);
 
 /** A file that was uploaded, with the name that it has at the person's computer. */
 export interface UploadedFile {
@@ -19,61 +16,90 @@ export interface UploadedFile {
   readonly bytes: Buffer;
 }
 
-/** Keeps the file and says what importing it would do, with every setting detected. Nothing is changed. */
-export async function uploadImport(context: Context, projectId: string, file: UploadedFile): Promise<ImportPreview> {
-  return withOrg(context, async (tx) => {
-    const design = await loadDesignIn(tx, projectId);
-    const interpretation = readable(() => interpret(file.bytes, {}, design));
-    const id = newId();
-    await insertImport(tx, {
-      id, orgId: context.orgId, projectId, personId: context.personId, fileName: file.name, bytes: file.bytes,
-      sha256: createHash('sha256').update(file.bytes).digest('hex'),
-      expiresAt: new Date(Date.now() + KEPT_DAYS * 86_400_000),
-    });
-    return previewOf(id, file.name, interpretation, design);
-  });
-}
+type Asking = Pick<Services, 'tasks' | 'cache'>;
 
-/** The same with other settings. @throws {NotFound} */
-export async function previewImport(context: Context, projectId: string, id: string, settings: ImportSettings): Promise<ImportPreview> {
-  return withOrg(context, async (tx) => {
-    const kept = await findImport(tx, projectId, id);
-    if (!kept) throw new NotFound('import');
-    const design = await loadDesignIn(tx, projectId);
-    return previewOf(id, kept.fileName, readable(() => interpret(kept.bytes, settings, design)), design);
-  });
+/** The rows of the last preview, and the settings that they were read with. */
+interface KeptPreview {
+  readonly settings: string;
+  readonly rows: PackedRows;
 }
 
 /**
- * Reads the kept file again and imports it: all rows that are not held back, or nothing, in one transaction. The same
- * commit again changes nothing and answers what the first one created and updated; rows that it left alone are not kept.
- * @throws {NotFound}, {StaleWrite} where somebody changed a row that it updates between reading and writing
+ * Keeps the file and says what importing it would do, with every setting detected. Nothing is changed; a file that
+ * cannot be read is not kept. The same upload again is the same import.
  */
-export async function commitImport(context: Context, projectId: string, id: string, settings: ImportSettings): Promise<ImportResult> {
-  return withOrg(context, async (tx) => {
-    const kept = await findImportForUpdate(tx, projectId, id);
-    if (!kept) throw new NotFound('import');
-    if (kept.committedAt) return resultOf(kept);
-    const design = await loadDesignIn(tx, projectId);
-    const { plan } = readable(() => interpret(kept.bytes, settings, design));
-    const changes = rowChangesOf(plan, design);
-    const { toCreate: created, toUpdate: updated, same, heldBack } = plan.counts;
-    await markCommitted(tx, id, { settings, created, updated, changeSetId: changes.length > 0 ? id : null });
-    if (changes.length === 0) return { id, created, updated, same, heldBack, sequence: null };
-    const notice = await applyChangeSetIn(tx, context, projectId, { id, summary: `Import of ${kept.fileName}`.slice(0, 300), changes });
-    return { id, created, updated, same, heldBack, sequence: notice.sequence };
+export async function uploadImport(asking: Asking, context: Context, key: ImportKey, file: UploadedFile): Promise<ImportPreview> {
+  await withOrg(context, async (tx) => {
+    const sha256 = createHash('sha256').update(file.bytes).digest('hex');
+    const kept = await insertImport(tx, {
+      id: key.importId, orgId: context.orgId, projectId: key.projectId, personId: context.personId, fileName: file.name, bytes: file.bytes, sha256,
+      expiresAt: new Date(Date.now() + KEPT_DAYS * 86_400_000),
+    });
+    if (!kept) throw new Conflict('Another file has this identifier. Upload it again.');
   });
-}
-
-const resultOf = ({ id, created, updated }: ImportRow): ImportResult => ({ id, created, updated, same: 0, heldBack: 0, sequence: null });
-
-/** A refusal in the words of the reader, as a problem document. */
-function readable<T>(work: () => T): T {
   try {
-    return work();
+    return await look(asking, context, key, {});
   } catch (error) {
-    if (!(error instanceof ImportRefusal)) throw error;
-    const detail = `${error.detail} ${error.remedy}`;
-    throw TOO_LARGE.has(error.code) ? new TooLarge(error.title, detail) : new ProblemError(422, 'unreadable-file', error.title, { detail });
+    await withOrg(context, (tx) => deleteImport(tx, key.importId));
+    throw error;
   }
 }
+
+/** The same with other settings. @throws {NotFound} */
+export async function previewImport(asking: Asking, context: Context, key: ImportKey, settings: ImportSettings): Promise<ImportPreview> {
+  await requireImport(context, key);
+  return look(asking, context, key, settings);
+}
+
+/** JSON of some rows of the last preview. @throws {NotFound} */
+export async function readRows(asking: Asking, context: Context, key: ImportKey, page: { readonly show: RowFilter; readonly offset: number; readonly limit: number }): Promise<string> {
+  const settings = await requireImport(context, key);
+  const keptRows = () => {
+    const kept = asking.cache.get<KeptPreview>(key.importId);
+    return kept?.settings === canonical(settings) ? kept : undefined;
+  };
+  if (!keptRows()) await look(asking, context, key, settings);
+  const kept = keptRows();
+  if (!kept) throw new NotFound('import');
+  return pageText(kept.rows, page.show, page.offset, page.limit);
+}
+
+/** Imports the kept file, see `commitTask`. @throws {NotFound}, {StaleWrite} */
+export async function commitImport({ tasks, cache }: Asking, context: Context, key: ImportKey, settings: ImportSettings): Promise<ImportResult> {
+  await requireImport(context, key);
+  const result = await runTracked<ImportResult>(tasks, context, key, 'imports.commit', inputOf(context, key, settings));
+  cache.drop(key.importId);
+  return result;
+}
+
+/** How far the import is that is being read or written; undefined where nothing is under way. */
+export const readWork = (context: Context, key: ImportKey): Promise<ImportWork | undefined> => withOrg(context, (tx) => findWork(tx, key));
+
+/** Stops reading or writing, in whichever instance it is under way; nothing is changed then. */
+export async function stopWork({ tasks }: Asking, context: Context, key: ImportKey): Promise<void> {
+  await requireImport(context, key);
+  await withOrg(context, (tx) => wishToStop(tx, key.importId));
+  tasks.cancel(key.importId);
+}
+
+async function look({ tasks, cache }: Asking, context: Context, key: ImportKey, settings: ImportSettings): Promise<ImportPreview> {
+  const { preview, rows } = await runTracked<PreviewOutput>(tasks, context, key, 'imports.preview', inputOf(context, key, settings));
+  const kept: KeptPreview = { settings: canonical(settings), rows };
+  cache.put(key.importId, kept, rows.json.byteLength + rows.ends.byteLength + rows.kinds.byteLength);
+  return preview;
+}
+
+/** The settings with which it was last read. @throws {NotFound} */
+async function requireImport(context: Context, { projectId, importId }: ImportKey): Promise<ImportSettings> {
+  const kept = await withOrg(context, (tx) => findImportState(tx, projectId, importId));
+  if (!kept) throw new NotFound('import');
+  return kept.settings ?? {};
+}
+
+const inputOf = ({ orgId, personId }: Context, { projectId, importId }: ImportKey, settings: ImportSettings): ImportInput =>
+  ({ orgId, personId, projectId, importId, settings });
+
+/** The same text for the same settings, in whatever order the database gives them back. */
+const canonical = (settings: ImportSettings): string => JSON.stringify(settings, (_key, value: unknown) =>
+  value !== null && typeof value === 'object' && !Array.isArray(value)
+    ? Object.fromEntries(Object.entries(value).sort(([a], [b]) => (a < b ? -1 : 1))) : value);

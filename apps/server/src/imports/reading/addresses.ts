@@ -1,5 +1,5 @@
 import type { Controller, Purpose } from '#calc';
-import { addressOf, nameKey, type DesignIndex, type TypedModule } from './design-index.ts';
+import { addressOf, type DesignIndex, type TypedModule } from './design-index.ts';
 import type { Fault, ProblemCode } from './plan.ts';
 
 /** What a row says of one signal; null each: nothing. */
@@ -88,14 +88,7 @@ function byDirectAddress(text: string, purpose: Purpose, controller: Controller,
     );
   }
   if (parsed.kind !== KIND[purpose]) return wrongKind(text, purpose);
-  const module = index
-    .modulesOf(controller)
-    .find(
-      (each) =>
-        each.type.kind === parsed.kind &&
-        parsed.byte >= each.baseByte &&
-        parsed.byte < each.baseByte + Math.ceil(each.type.channels / 8),
-    );
+  const module = index.moduleAt(controller.id, parsed.kind, parsed.byte);
   if (!module) {
     return wrong(
       'address',
@@ -138,7 +131,7 @@ function byModuleAndChannel(
       'Add the module, or write the direct address.',
     );
   }
-  const module = index.modulesOf(controller).find((each) => nameKey(each.name) === nameKey(texts.module!));
+  const module = index.moduleNamed(controller.id, texts.module);
   if (!module)
     return wrong(
       'module',
@@ -198,9 +191,11 @@ function channelOf(module: TypedModule, channel: number, said: keyof SignalTexts
   );
 }
 
+const DIRECT_ADDRESS = /^%([QI])X?(\d{1,6})\.([0-7])$/i;
+
 /** IEC 61131-3: %QX4.3, the X may be left out; null when it is none. */
 function parseAddress(text: string): DirectAddress | null {
-  const parts = /^%([QI])X?(\d{1,6})\.([0-7])$/i.exec(text.normalize('NFKC').replace(/\s/g, ''));
+  const parts = DIRECT_ADDRESS.exec(text) ?? DIRECT_ADDRESS.exec(text.normalize('NFKC').replace(/\s/g, ''));
   if (!parts) return null;
   return { kind: parts[1].toUpperCase() === 'Q' ? 'output' : 'input', byte: Number(parts[2]), bit: Number(parts[3]) };
 }

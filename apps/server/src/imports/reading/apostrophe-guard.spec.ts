@@ -40,6 +40,6 @@ describe('the apostrophe guard', () => {
 
   it('is taken off only where the headings say so', () => {
     expect(hasGuardMark(['Tag', 'Remarks'])).toBe(false);
-    expect(hasGuardMark(markHeadings(['Tag', 'Remarks']))).toBe(true);
+    expect(hasGuardMark(markHeadings(['Tag', 'Remarks'], '.'))).toBe(true);
   });
 });

@@ -11,9 +11,10 @@ export interface Refusal {
   readonly holder: string;
 }
 
+/** Who has a channel: a point of the project, and a row of the file where that asks for it. */
 interface Holder {
   readonly pointId: string | null;
-  readonly name: string;
+  readonly reading: RowReading | null;
 }
 
 const PURPOSES: readonly Purpose[] = ['control', 'status'];
@@ -27,13 +28,14 @@ const PURPOSES: readonly Purpose[] = ['control', 'status'];
  * @returns the refused claims; all others are granted
  */
 export function refusedClaims(readings: readonly RowReading[], index: DesignIndex): Refusal[] {
-  const moving = new Set(
-    readings.flatMap((reading) =>
-      PURPOSES.filter((each) => moves(reading, each, index)).map((each) => useOf(reading, each)),
-    ),
-  );
+  const asking = readings.filter(({ wants }) => wants.control || wants.status);
+  if (asking.length === 0) return [];
+  const moving = new Set<string>();
+  for (const reading of asking) {
+    for (const purpose of PURPOSES) if (moves(reading, purpose, index)) moving.add(useOf(reading, purpose));
+  }
   for (;;) {
-    const refused = allot(readings, standing(moving, index));
+    const refused = allot(asking, standing(moving, index), index);
     const stuck = refused.map(({ reading, purpose }) => useOf(reading, purpose)).filter((use) => moving.delete(use));
     if (stuck.length === 0) return refused;
   }
@@ -55,37 +57,34 @@ function keyOf({ module, channel }: Channel): string {
 }
 
 /** The channels that points of the project keep. */
-function standing(moving: ReadonlySet<string>, index: DesignIndex): Map<string, Holder> {
-  const pointOf = new Map(index.design.dispensers.map((each) => [each.id, each.pointId]));
-  const tagOf = new Map(index.design.points.map((each) => [each.id, each.tag]));
-  const kept = index.design.assignments.filter(
-    (each) => !moving.has(`${pointOf.get(each.dispenserId)} ${each.purpose}`),
-  );
-  return new Map(
-    kept.map((each) => {
-      const pointId = pointOf.get(each.dispenserId) ?? null;
-      return [
-        `${each.moduleId} ${each.channel}`,
-        { pointId, name: `point ${(pointId && tagOf.get(pointId)) ?? 'without tag'} of the project` },
-      ];
-    }),
-  );
+function standing(moving: ReadonlySet<string>, { design }: DesignIndex): Map<string, Holder> {
+  const pointOf = new Map(design.dispensers.map((each) => [each.id, each.pointId]));
+  const taken = new Map<string, Holder>();
+  for (const { dispenserId, purpose, moduleId, channel } of design.assignments) {
+    const pointId = pointOf.get(dispenserId) ?? null;
+    if (!moving.has(`${pointId} ${purpose}`)) taken.set(`${moduleId} ${channel}`, { pointId, reading: null });
+  }
+  return taken;
 }
 
-function allot(readings: readonly RowReading[], taken: Map<string, Holder>): Refusal[] {
+function allot(readings: readonly RowReading[], taken: Map<string, Holder>, index: DesignIndex): Refusal[] {
   const refused: Refusal[] = [];
   for (const reading of readings) {
     for (const purpose of PURPOSES) {
       const wanted = reading.wants[purpose];
       if (!wanted) continue;
-      const holder = taken.get(keyOf(wanted));
+      const key = keyOf(wanted);
+      const holder = taken.get(key);
       const mine = reading.point !== null && holder?.pointId === reading.point.id;
-      if (holder && !mine) {
-        refused.push({ reading, purpose, holder: holder.name });
-      } else {
-        taken.set(keyOf(wanted), { pointId: reading.point?.id ?? null, name: `row ${reading.row.number}` });
-      }
+      if (holder && !mine) refused.push({ reading, purpose, holder: nameOf(holder, purpose, index) });
+      else taken.set(key, { pointId: reading.point?.id ?? null, reading });
     }
   }
   return refused;
+}
+
+function nameOf({ pointId, reading }: Holder, purpose: Purpose, { design }: DesignIndex): string {
+  if (reading) return (reading.signalRow[purpose] ?? reading).place;
+  const tag = design.points.find(({ id }) => id === pointId)?.tag;
+  return `point ${tag ?? 'without tag'} of the project`;
 }

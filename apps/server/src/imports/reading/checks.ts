@@ -23,15 +23,17 @@ const POSITIVE = [
   ['crossSectionMm2', 'The cross-section'],
 ] as const;
 
+const VOLUMES = ['demandUlPer100h', 'demandUlPer1000h', 'cartridgeUl', 'doseUl'] as const;
+
 type NumberKey = (typeof POSITIVE)[number][0];
 
 /**
  * Checks what a row says, by itself and together with what the project says of its point. A value at
- * fault becomes blank and is reported.
+ * fault becomes blank and is reported; one that the project has already is no fault of the file.
  */
-export function checkValues(reading: RowReading, index: DesignIndex): void {
-  checkTag(reading);
-  for (const [key, name] of POSITIVE) checkPositive(reading, key, name);
+export function checkValues(reading: RowReading): void {
+  const { index } = reading.context;
+  for (let i = 0; i < POSITIVE.length; i += 1) checkPositive(reading, POSITIVE[i][0], POSITIVE[i][1]);
   checkRanges(reading);
   checkDose(reading);
   checkDiameters(reading);
@@ -40,7 +42,8 @@ export function checkValues(reading: RowReading, index: DesignIndex): void {
   checkBox(reading, index);
 }
 
-function checkTag(reading: RowReading): void {
+/** A row without a tag, or with one that is too long, makes no point. */
+export function checkTag(reading: RowReading): void {
   const { tag } = reading.values;
   if (tag === null) {
     reading.error('tag', fault('tag-missing', 'The row has no tag.', 'Give the point a tag, or delete the row.'));
@@ -70,7 +73,7 @@ function checkPositive(reading: RowReading, key: NumberKey, name: string): void 
 function checkRanges(reading: RowReading): void {
   atMost(reading, 'hoursPerDay', 24, 'A day has 24 hours.', 'Write the hours a day, up to 24.');
   atMost(reading, 'daysPerWeek', 7, 'A week has 7 days.', 'Write the days a week, up to 7.');
-  for (const key of ['demandUlPer100h', 'demandUlPer1000h', 'cartridgeUl', 'doseUl'] as const) {
+  for (const key of VOLUMES) {
     atMost(reading, key, MAX_VOLUME_UL, 'The volume is larger than a tank.', 'Check the number and its decimal sign.');
   }
 }
@@ -98,7 +101,8 @@ function checkDiameters(reading: RowReading): void {
   const bore = values.boreMm ?? existing.boreMm;
   const outside = values.outsideMm ?? existing.outsideMm;
   if (bore === null || outside === null || outside > bore) return;
-  const key = values.outsideMm === null ? 'boreMm' : 'outsideMm';
+  const key = values.outsideMm === null || values.outsideMm === existing.outsideMm ? 'boreMm' : 'outsideMm';
+  if (values[key] === existing[key]) return;
   blank(
     reading,
     key,
@@ -156,9 +160,12 @@ function checkType(reading: RowReading, index: DesignIndex): void {
   }
 }
 
-function effectiveType(reading: RowReading, index: DesignIndex): DispenserType | undefined {
-  const name = reading.values.dispenserType ?? reading.existing.dispenserType;
-  return name === null ? undefined : index.typeNamed(name);
+/** A point that keeps its type keeps the version of it too. */
+function effectiveType({ values, existing, point }: RowReading, index: DesignIndex): DispenserType | undefined {
+  const name = values.dispenserType ?? existing.dispenserType;
+  if (name === null) return undefined;
+  const typeId = point && name === existing.dispenserType ? index.dispenserByPoint.get(point.id)?.typeId : null;
+  return (typeId && index.typeById.get(typeId)) || index.typeNamed(name);
 }
 
 function checkCartridge(reading: RowReading, type: DispenserType): void {
@@ -193,6 +200,7 @@ function checkBox(reading: RowReading, index: DesignIndex): void {
 }
 
 function blank(reading: RowReading, key: keyof ImportValues, reason: Fault): void {
+  if (reading.values[key] === reading.existing[key]) return;
   reading.values[key] = null;
   reading.warn(key, reason);
 }

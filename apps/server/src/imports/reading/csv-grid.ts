@@ -1,13 +1,14 @@
-import { CsvError } from 'csv-parse';
-import { parse } from 'csv-parse/sync';
-import { detectDelimiter, RECORD_ENDS, type Delimiter } from './delimiter.ts';
-import { columnLetter, isBlankRow, LIMITS, type Grid, type GridRow } from './grid.ts';
+import { CsvRecords, QuoteNotClosed } from './csv-records.ts';
+import { detectDelimiter, type Delimiter } from './delimiter.ts';
+import { columnLetter, isBlank, isBlankRow, LIMITS, type Grid, type GridRow } from './grid.ts';
 import { ImportRefusal } from './import-refusal.ts';
 
 export interface CsvReading {
   readonly grid: Grid;
   readonly delimiter: Delimiter;
 }
+
+const PROGRESS_ROWS = 1_000;
 
 /**
  * Reads a CSV text into a grid: quotes, doubled quotes and line ends inside quotes as RFC 4180 has them, a
@@ -16,63 +17,41 @@ export interface CsvReading {
  *
  * @param text the decoded file
  * @param chosen the delimiter that a person set; detected without it
+ * @param onProgress told every thousand records how many have been read
  * @throws {ImportRefusal} when a quote never closes or a limit is passed
  */
-export function readCsv(text: string, chosen?: Delimiter): CsvReading {
+export function readCsv(text: string, chosen?: Delimiter, onProgress?: (rows: number) => void): CsvReading {
   const delimiter = chosen ?? detectDelimiter(text);
-  const rows = recordsOf(text, delimiter);
-  const last = rows.findLastIndex((row) => !isBlankRow(row));
-  const kept = rows.slice(0, last + 1);
-  refuseBeyondLimits(kept);
-  return { grid: { rows: kept }, delimiter };
+  const rows = rowsOf(text, delimiter, onProgress);
+  while (rows.length > 0 && isBlankRow(rows[rows.length - 1])) rows.pop();
+  refuseBeyondLimits(rows);
+  return { grid: { rows }, delimiter };
 }
 
-interface RawRecord {
-  readonly record: string[];
-  readonly raw: string;
-}
-
-function recordsOf(text: string, delimiter: Delimiter): GridRow[] {
-  let line = 1;
-  return parseRecords(text, delimiter).map(({ record, raw }, i) => {
-    const row = { number: i + 1, line, cells: record };
-    // `raw` ends with the record's own line end, save in the last record
-    line += raw.match(/\r\n|\n|\r/g)?.length ?? 0;
-    return row;
-  });
-}
-
-function parseRecords(text: string, delimiter: Delimiter): RawRecord[] {
+function rowsOf(text: string, delimiter: Delimiter, onProgress?: (rows: number) => void): GridRow[] {
+  const records = new CsvRecords(text, delimiter);
+  const rows: GridRow[] = [];
   try {
-    return parse(text, {
-      delimiter,
-      record_delimiter: RECORD_ENDS,
-      relax_quotes: true,
-      relax_column_count: true,
-      raw: true,
-      // blank rows behind the end count for nothing, but they are not read without end
-      to: 2 * LIMITS.rows,
-    }) as unknown as RawRecord[];
+    // blank rows behind the end count for nothing, but they are not read without end
+    while (rows.length < 2 * LIMITS.rows) {
+      const { line } = records;
+      const cells = records.next();
+      if (!cells) break;
+      rows.push({ number: rows.length + 1, line, cells });
+      if (rows.length % PROGRESS_ROWS === 0) onProgress?.(rows.length);
+    }
   } catch (error) {
-    throw error instanceof CsvError ? unreadable(error) : error;
+    throw error instanceof QuoteNotClosed ? quoteNotClosed() : error;
   }
+  return rows;
 }
 
-function unreadable(error: CsvError): ImportRefusal {
-  const { lines } = error as CsvError & { readonly lines?: number };
-  if (error.code === 'CSV_QUOTE_NOT_CLOSED') {
-    return new ImportRefusal(
-      'quote-not-closed',
-      'A quotation mark is never closed',
-      'A cell begins with a quotation mark, and the file ends before the mark that closes it.',
-      'Look for a cell with a single quotation mark (a length in inches, for instance), double it or take it out, and choose the file again.',
-    );
-  }
+function quoteNotClosed(): ImportRefusal {
   return new ImportRefusal(
-    'unreadable',
-    'The file cannot be read as CSV',
-    lines === undefined ? 'Its records are broken.' : `Reading stopped at line ${lines}.`,
-    'Open the file in a spreadsheet program, check that line and save it as CSV (UTF-8).',
+    'quote-not-closed',
+    'A quotation mark is never closed',
+    'A cell begins with a quotation mark, and the file ends before the mark that closes it.',
+    'Look for a cell with a single quotation mark (a length in inches, for instance), double it or take it out, and choose the file again.',
   );
 }
 
@@ -86,13 +65,13 @@ function refuseBeyondLimits(rows: readonly GridRow[]): void {
     );
   }
   for (const row of rows) {
-    refuseWideRow(row);
-    refuseLongCell(row);
+    if (row.cells.length > LIMITS.columns) refuseWideRow(row);
+    for (const cell of row.cells) if (cell.length > LIMITS.cellLength) refuseLongCell(row);
   }
 }
 
 function refuseWideRow(row: GridRow): void {
-  if (row.cells.findLastIndex((cell) => cell.trim() !== '') < LIMITS.columns) return;
+  if (row.cells.findLastIndex((cell) => !isBlank(cell)) < LIMITS.columns) return;
   throw new ImportRefusal(
     'too-many-columns',
     'The list has too many columns',
@@ -101,9 +80,8 @@ function refuseWideRow(row: GridRow): void {
   );
 }
 
-function refuseLongCell(row: GridRow): void {
+function refuseLongCell(row: GridRow): never {
   const index = row.cells.findIndex((cell) => cell.length > LIMITS.cellLength);
-  if (index < 0) return;
   throw new ImportRefusal(
     'cell-too-long',
     'A cell is too long',

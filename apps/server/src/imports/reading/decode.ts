@@ -171,7 +171,7 @@ function oldSpreadsheet(): ImportRefusal {
     'old-spreadsheet',
     'This is a spreadsheet of the old kind, not a CSV',
     'The file is in the binary format of older office programs.',
-    'Open it in your spreadsheet program and save the sheet as CSV (UTF-8).',
+    'Open it in your spreadsheet program and save it as .xlsx, or save the sheet as CSV (UTF-8).',
   );
 }
 

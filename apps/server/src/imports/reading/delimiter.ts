@@ -1,12 +1,10 @@
-import { parse } from 'csv-parse/sync';
+import { CsvRecords } from './csv-records.ts';
+import { isBlank } from './grid.ts';
 
 export const DELIMITERS = [',', ';', '\t', '|'] as const;
 export type Delimiter = (typeof DELIMITERS)[number];
 
 const SAMPLE_RECORDS = 60;
-
-/** Both line ends, also mixed: inside quotes they are text. */
-export const RECORD_ENDS = ['\r\n', '\n', '\r'];
 
 /**
  * Finds the delimiter by reading the first records with each candidate: the right one gives many columns,
@@ -25,15 +23,15 @@ export function detectDelimiter(text: string): Delimiter {
 }
 
 function widths(text: string, delimiter: Delimiter): number[] {
+  const records = new CsvRecords(text, delimiter);
+  const found: number[] = [];
   try {
-    const records = parse(text, {
-      delimiter,
-      record_delimiter: RECORD_ENDS,
-      relax_quotes: true,
-      relax_column_count: true,
-      to: SAMPLE_RECORDS,
-    });
-    return records.filter((cells) => cells.some((cell) => cell.trim() !== '')).map((cells) => cells.length);
+    for (let i = 0; i < SAMPLE_RECORDS; i += 1) {
+      const cells = records.next();
+      if (!cells) break;
+      if (!cells.every(isBlank)) found.push(cells.length);
+    }
+    return found;
   } catch {
     return [];
   }

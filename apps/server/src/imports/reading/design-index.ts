@@ -12,7 +12,8 @@ import type {
   Point,
   Purpose,
 } from '#calc';
-import type { DraftValues, ImportValues } from './plan.ts';
+import { valuesOfPoint } from './design-values.ts';
+import type { ImportValues } from './plan.ts';
 
 /** A module with the type that says how many channels it has and of which kind. */
 export interface TypedModule extends Module {
@@ -30,187 +31,140 @@ export function addressOf(module: TypedModule, channel: number): string {
   return `%${module.type.kind === 'output' ? 'Q' : 'I'}X${byte}.${channel % 8}`;
 }
 
+interface Rack {
+  readonly modules: TypedModule[];
+  readonly byName: NameMap<TypedModule>;
+  readonly byByte: Record<ModuleType['kind'], Map<number, TypedModule>>;
+}
+
+const KEPT = new WeakMap<Design, DesignIndex>();
+
 /** A design by the names that a list uses. Built once for an import; the design is not changed. */
 export class DesignIndex {
   readonly pointByTag: ReadonlyMap<string, Point>;
   readonly dispenserByPoint: ReadonlyMap<string, Dispenser>;
   readonly moduleById: ReadonlyMap<string, TypedModule>;
-  private readonly assignmentByUse: ReadonlyMap<string, Assignment>;
-  private readonly types: ReadonlyMap<string, DispenserType>;
-  private readonly controllers: ReadonlyMap<string, Controller>;
-  private readonly circuits: ReadonlyMap<string, Circuit>;
-  private readonly greases: ReadonlyMap<string, Grease>;
-  private readonly boxes: ReadonlyMap<string, CableNode>;
-  private readonly boxById: ReadonlyMap<string, CableNode>;
-  private readonly modulesByController = new Map<string, TypedModule[]>();
+  readonly typeById: ReadonlyMap<string, DispenserType>;
+  readonly controllerById: ReadonlyMap<string, Controller>;
+  readonly circuitById: ReadonlyMap<string, Circuit>;
+  readonly greaseById: ReadonlyMap<string, Grease>;
+  readonly boxById: ReadonlyMap<string, CableNode>;
+  private readonly assignments: Readonly<Record<Purpose, Map<string, Assignment>>> = { control: new Map(), status: new Map() };
+  private readonly types: NameMap<DispenserType>;
+  private readonly controllers: NameMap<Controller>;
+  private readonly circuits: NameMap<Circuit>;
+  private readonly greases: NameMap<Grease>;
+  private readonly boxes: NameMap<CableNode>;
+  private readonly racks = new Map<string, Rack>();
 
   constructor(readonly design: Design) {
-    const types = new Map(design.moduleTypes.map((type) => [type.id, type]));
     this.pointByTag = new Map(design.points.map((point) => [point.tag, point]));
     this.dispenserByPoint = new Map(design.dispensers.map((each) => [each.pointId, each]));
-    this.moduleById = new Map(design.modules.map((each) => [each.id, { ...each, type: types.get(each.typeId)! }]));
-    this.assignmentByUse = new Map(design.assignments.map((each) => [`${each.dispenserId} ${each.purpose}`, each]));
+    for (const each of design.assignments) this.assignments[each.purpose].set(each.dispenserId, each);
+    this.typeById = byId(design.dispenserTypes);
+    this.controllerById = byId(design.controllers);
+    this.circuitById = byId(design.circuits);
+    this.greaseById = byId(design.greases);
+    this.boxById = byId(design.cableNodes);
     const byVersion = [...design.dispenserTypes].sort((a, b) => b.typeVersion - a.typeVersion);
-    this.types = byName(byVersion, ({ name }) => name);
-    this.controllers = byName(design.controllers, ({ name }) => name);
-    this.circuits = byName(design.circuits, ({ name }) => name);
-    this.greases = byName(design.greases, ({ name }) => name);
-    this.boxes = byName(design.cableNodes, ({ location }) => location);
-    this.boxById = new Map(design.cableNodes.map((each) => [each.id, each]));
-    for (const each of this.moduleById.values()) {
-      this.modulesByController.set(each.controllerId, [
-        ...(this.modulesByController.get(each.controllerId) ?? []),
-        each,
-      ]);
-    }
+    this.types = new NameMap(byVersion, ({ name }) => name);
+    this.controllers = new NameMap(design.controllers, ({ name }) => name);
+    this.circuits = new NameMap(design.circuits, ({ name }) => name);
+    this.greases = new NameMap(design.greases, ({ name }) => name);
+    this.boxes = new NameMap(design.cableNodes, ({ location }) => location);
+    const moduleTypes = byId(design.moduleTypes);
+    this.moduleById = byId(design.modules.map((each) => ({ ...each, type: moduleTypes.get(each.typeId)! })));
+    for (const each of this.moduleById.values()) this.mount(each);
+  }
+
+  /** The index of this very design, made once. */
+  static of(design: Design): DesignIndex {
+    let index = KEPT.get(design);
+    if (!index) KEPT.set(design, (index = new DesignIndex(design)));
+    return index;
   }
 
   /** The dispenser type of this name; of several versions the newest. */
   typeNamed(name: string): DispenserType | undefined {
-    return this.types.get(nameKey(name));
+    return this.types.get(name);
   }
 
   controllerNamed(name: string): Controller | undefined {
-    return this.controllers.get(nameKey(name));
+    return this.controllers.get(name);
   }
 
   circuitNamed(name: string): Circuit | undefined {
-    return this.circuits.get(nameKey(name));
+    return this.circuits.get(name);
   }
 
   greaseNamed(name: string): Grease | undefined {
-    return this.greases.get(nameKey(name));
+    return this.greases.get(name);
   }
 
   /** The junction box at this location. */
   boxNamed(location: string): CableNode | undefined {
-    return this.boxes.get(nameKey(location));
+    return this.boxes.get(location);
   }
 
   modulesOf(controller: Controller): readonly TypedModule[] {
-    return this.modulesByController.get(controller.id) ?? [];
+    return this.racks.get(controller.id)?.modules ?? [];
+  }
+
+  /** The module of this name in a controller. */
+  moduleNamed(controllerId: string, name: string): TypedModule | undefined {
+    return this.racks.get(controllerId)?.byName.get(name);
+  }
+
+  /** The module of a controller whose channels cover this byte. */
+  moduleAt(controllerId: string, kind: ModuleType['kind'], byte: number): TypedModule | undefined {
+    return this.racks.get(controllerId)?.byByte[kind].get(byte);
   }
 
   assignmentOf(dispenser: Dispenser | undefined, purpose: Purpose): Assignment | undefined {
-    return dispenser && this.assignmentByUse.get(`${dispenser.id} ${purpose}`);
+    return dispenser && this.assignments[purpose].get(dispenser.id);
   }
 
   /** What the design says of a point, in the words of an import: to compare, and to export. */
   valuesOf(point: Point): ImportValues {
-    const dispenser = this.dispenserByPoint.get(point.id);
-    return { ...blankValues(), ...this.pointValues(point), ...(dispenser && this.dispenserValues(dispenser)) };
+    return valuesOfPoint(point, this);
   }
 
-  private pointValues(point: Point): Partial<DraftValues> {
-    const per100h = demandPer100h(point);
-    const { tag, description, location, product, machine, remarks, daysPerWeek } = point;
-    const { boreMm, outsideMm, widthMm, speedRpm, hoursPerDay } = point;
-    return {
-      tag,
-      description,
-      function: point.function,
-      location,
-      product,
-      machine,
-      remarks,
-      boreMm,
-      outsideMm,
-      widthMm,
-      speedRpm,
-      hoursPerDay,
-      daysPerWeek,
-      demandUlPer100h: per100h,
-      demandUlPer1000h: per100h === null ? null : point.statedPer === '1000h' ? point.statedUl : per100h * 10,
-      grease: nameById(this.design.greases, point.greaseId),
-    };
-  }
-
-  private dispenserValues(dispenser: Dispenser): Partial<DraftValues> {
-    const { cartridgeUl, doseUl, wiring, cableTag, cableLengthM, crossSectionMm2 } = dispenser;
-    const output = this.channelOf(this.assignmentOf(dispenser, 'control'));
-    const status = this.channelOf(this.assignmentOf(dispenser, 'status'));
-    return {
-      cartridgeUl,
-      doseUl,
-      wiring,
-      cableTag,
-      cableLengthM,
-      crossSectionMm2,
-      dispenserType: nameById(this.design.dispenserTypes, dispenser.typeId),
-      controller: nameById(this.design.controllers, dispenser.controllerId),
-      circuit: nameById(this.design.circuits, dispenser.circuitId),
-      junctionBox: (dispenser.nodeId && this.boxById.get(dispenser.nodeId)?.location) ?? null,
-      outputModule: output.module,
-      outputChannel: output.channel,
-      outputAddress: output.address,
-      statusModule: status.module,
-      statusChannel: status.channel,
-      statusAddress: status.address,
-    };
-  }
-
-  private channelOf(assignment: Assignment | undefined): NamedChannel {
-    const module = assignment && this.moduleById.get(assignment.moduleId);
-    if (!module) return { module: null, channel: null, address: null };
-    return { module: module.name, channel: assignment.channel, address: addressOf(module, assignment.channel) };
+  private mount(module: TypedModule): void {
+    let rack = this.racks.get(module.controllerId);
+    if (!rack) {
+      rack = { modules: [], byName: new NameMap<TypedModule>([], ({ name }) => name), byByte: { output: new Map(), input: new Map() } };
+      this.racks.set(module.controllerId, rack);
+    }
+    rack.modules.push(module);
+    rack.byName.add(module);
+    const bytes = rack.byByte[module.type.kind];
+    for (let i = 0; i < Math.ceil(module.type.channels / 8); i += 1) {
+      if (!bytes.has(module.baseByte + i)) bytes.set(module.baseByte + i, module);
+    }
   }
 }
 
-/** The first row of each name counts. */
-function byName<T>(rows: readonly T[], nameOf: (row: T) => string): Map<string, T> {
-  return new Map([...rows].reverse().map((row) => [nameKey(nameOf(row)), row]));
+/** Rows by name. A name as it stands goes before the same in other case; the first row of each name counts. */
+class NameMap<T> {
+  private readonly exact = new Map<string, T>();
+  private readonly folded = new Map<string, T>();
+
+  constructor(rows: readonly T[], private readonly nameOf: (row: T) => string) {
+    for (const row of rows) this.add(row);
+  }
+
+  add(row: T): void {
+    const name = this.nameOf(row);
+    const key = nameKey(name);
+    if (!this.exact.has(name)) this.exact.set(name, row);
+    if (!this.folded.has(key)) this.folded.set(key, row);
+  }
+
+  get(name: string): T | undefined {
+    return this.exact.get(name) ?? this.folded.get(nameKey(name));
+  }
 }
 
-interface NamedChannel {
-  readonly module: string | null;
-  readonly channel: number | null;
-  readonly address: string | null;
-}
-
-function demandPer100h({ statedUl, statedPer }: Point): number | null {
-  if (statedUl === null) return null;
-  if (statedPer === '100h') return statedUl;
-  return statedPer === '1000h' ? statedUl / 10 : null;
-}
-
-function nameById(rows: readonly { readonly id: string; readonly name: string }[], id: string | null): string | null {
-  return id === null ? null : (rows.find((each) => each.id === id)?.name ?? null);
-}
-
-/** Values of which nothing is said yet. */
-export function blankValues(): DraftValues {
-  return {
-    tag: null,
-    description: null,
-    function: null,
-    location: null,
-    product: null,
-    machine: null,
-    boreMm: null,
-    outsideMm: null,
-    widthMm: null,
-    speedRpm: null,
-    hoursPerDay: null,
-    daysPerWeek: null,
-    demandUlPer100h: null,
-    demandUlPer1000h: null,
-    grease: null,
-    dispenserType: null,
-    cartridgeUl: null,
-    doseUl: null,
-    wiring: null,
-    controller: null,
-    outputModule: null,
-    outputChannel: null,
-    outputAddress: null,
-    statusModule: null,
-    statusChannel: null,
-    statusAddress: null,
-    junctionBox: null,
-    cableTag: null,
-    cableLengthM: null,
-    crossSectionMm2: null,
-    circuit: null,
-    remarks: null,
-  };
+function byId<T extends { readonly id: string }>(rows: readonly T[]): Map<string, T> {
+  return new Map(rows.map((row) => [row.id, row]));
 }

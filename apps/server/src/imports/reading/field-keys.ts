@@ -26,9 +26,13 @@ export type FieldKey =
   | 'statusModule'
   | 'statusChannel'
   | 'statusAddress'
+  | SignalKey
   | 'junctionBox'
   | 'cableTag'
   | 'cableLengthM'
   | 'crossSectionMm2'
   | 'circuit'
   | 'remarks';
+
+/** What a row says of the one signal that it stands for, in a list with a row a signal. */
+export type SignalKey = 'signalType' | 'module' | 'channel' | 'address';

@@ -127,6 +127,20 @@ export const FIELD_NAMES: Readonly<Record<FieldKey, readonly string[]>> = {
     'statusadresse, ingangsadres, ingang, statusadres, adresse d entree, entree, direccion de entrada',
     'entrada',
   ),
+  signalType: names(
+    'signal type, type of signal, io type, i o type, io, i o, signal direction, signal kind, kind of signal',
+    'signaltyp, typ des signals, signalart, art des signals, ea typ, e a typ, e a, signaaltype, signaalsoort',
+    'soort signaal, type de signal, genre de signal, e s, tipo de senal, clase de senal',
+  ),
+  module: names(
+    'signal module, module, card, io module, io card, signal card, baugruppe, modul, karte, signalbaugruppe',
+    'kaart, carte, modulo, tarjeta',
+  ),
+  channel: names('signal channel, channel, io channel, kanal, signalkanal, kanaal, voie, canal'),
+  address: names(
+    'signal address, address, io address, direct address, plc address, adresse, signaladresse, sps adresse',
+    'adres, signaaladres, plc adres, adresse automate, direccion',
+  ),
   junctionBox: names(
     'junction box, box, klemmenkasten, verteilerkasten, klemkast, aansluitkast, coffret, boite de jonction',
     'caja, caja de conexiones',

@@ -1,15 +1,15 @@
-import type { FieldKey } from './field-keys.ts';
+import type { FieldKey, SignalKey } from './field-keys.ts';
 import { FIELD_NAMES } from './field-names.ts';
 
-export type { FieldKey };
+export type { FieldKey, SignalKey };
 
 /** How a cell of the field is read: `volume` is written in cm³ and kept in whole microlitres. */
 export type FieldKind = 'text' | 'number' | 'volume' | 'choice' | 'module' | 'channel' | 'address';
 
 export interface Field {
   readonly key: FieldKey;
-  /** The name of the value it fills, the same but for volumes. */
-  readonly value: ValueKey;
+  /** The name of the value it fills, the same but for volumes; a row's own signal becomes output or status. */
+  readonly value: ValueKey | SignalKey;
   readonly label: string;
   /** The unit of its numbers as a heading shows it; null: it has none. */
   readonly unit: string | null;
@@ -26,7 +26,7 @@ export interface Field {
 
 /** The values that a row gives, by name; what they hold is `ImportValues`. */
 export type ValueKey =
-  | Exclude<FieldKey, 'demandCm3Per100h' | 'demandCm3Per1000h' | 'cartridgeCm3' | 'doseCm3'>
+  | Exclude<FieldKey, SignalKey | 'demandCm3Per100h' | 'demandCm3Per1000h' | 'cartridgeCm3' | 'doseCm3'>
   | 'demandUlPer100h'
   | 'demandUlPer1000h'
   | 'cartridgeUl'
@@ -58,7 +58,7 @@ const PER_100H = ['cm3/100h', 'ccm/100h', 'ml/100h', 'cc/100h'];
 const PER_1000H = ['cm3/1000h', 'ccm/1000h', 'ml/1000h', 'cc/1000h', 'cm3/kh'];
 
 function field(key: FieldKey, label: string, kind: FieldKind, more: Partial<Field> = {}): Field {
-  const plain = { value: key as ValueKey, unit: null, units: [], symbol: null, unitNeeded: false };
+  const plain = { value: key as ValueKey | SignalKey, unit: null, units: [], symbol: null, unitNeeded: false };
   return { ...plain, ...more, key, label, kind, names: FIELD_NAMES[key] };
 }
 
@@ -100,6 +100,10 @@ export const FIELDS: readonly Field[] = [
   field('statusModule', 'Status module', 'module'),
   field('statusChannel', 'Status channel', 'channel'),
   field('statusAddress', 'Status address', 'address'),
+  field('signalType', 'Signal type', 'choice'),
+  field('module', 'Signal module', 'module'),
+  field('channel', 'Signal channel', 'channel'),
+  field('address', 'Signal address', 'address'),
   field('junctionBox', 'Junction box', 'choice'),
   field('cableTag', 'Cable', 'text'),
   field('cableLengthM', 'Cable length', 'number', { unit: 'm', units: METRES }),

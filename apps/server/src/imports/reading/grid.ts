@@ -23,7 +23,7 @@ export interface GridRow {
 export type DecimalMark = '.' | ',';
 
 /** Bounds of an upload. Rows count up to the last one with content, heading rows included. */
-export const LIMITS = { bytes: 10_000_000, rows: 50_000, columns: 200, cellLength: 4_000 } as const;
+export const LIMITS = { bytes: 25_000_000, rows: 100_000, columns: 200, cellLength: 4_000 } as const;
 
 /** How far down the heading row is looked for. */
 export const HEADER_SEARCH_ROWS = 20;
@@ -42,27 +42,55 @@ export function columnIndex(letter: string): number {
 
 /** Outer blanks of every kind gone: spaces, tabs, line ends, no-break spaces. */
 export function trimmed(cell: string): string {
-  return cell.trim();
+  // most cells begin and end with a plain letter or digit
+  return isPlain(cell.charCodeAt(0)) && isPlain(cell.charCodeAt(cell.length - 1)) ? cell : cell.trim();
+}
+
+/** Whether nothing but blanks stands in the cell. */
+export function isBlank(cell: string): boolean {
+  return cell === '' || (!isPlain(cell.charCodeAt(0)) && cell.trim() === '');
+}
+
+function isPlain(code: number): boolean {
+  return code > 32 && code < 160;
 }
 
 /** Whether nothing but blanks stands in the row. */
-export function isBlankRow(row: GridRow): boolean {
-  return row.cells.every((cell) => trimmed(cell) === '');
+export function isBlankRow({ cells }: GridRow): boolean {
+  for (const cell of cells) if (!isBlank(cell)) return false;
+  return true;
 }
 
 /** The row with this number, if the grid has it. */
 export function rowNumbered(grid: Grid, number: number): GridRow | undefined {
-  return grid.rows.find((row) => row.number === number);
+  const row = grid.rows[placeOf(grid, number)];
+  return row?.number === number ? row : undefined;
 }
 
 /** The rows below the heading row up to the last one with content; blank rows behind it count for nothing. */
 export function rowsBelow(grid: Grid, headerRow: number): readonly GridRow[] {
-  const below = grid.rows.filter((row) => row.number > headerRow);
-  const last = below.findLastIndex((row) => !isBlankRow(row));
-  return below.slice(0, last + 1);
+  let end = grid.rows.length;
+  while (end > 0 && isBlankRow(grid.rows[end - 1])) end -= 1;
+  return grid.rows.slice(placeOf(grid, headerRow + 1), end);
+}
+
+/** Place of the first row with this number or a higher one; rows stand in the order of their numbers. */
+function placeOf({ rows }: Grid, number: number): number {
+  let [low, high] = [0, rows.length];
+  while (low < high) {
+    const middle = (low + high) >> 1;
+    if (rows[middle].number < number) low = middle + 1;
+    else high = middle;
+  }
+  return low;
 }
 
 /** Cells of one column in these rows, trimmed, blanks left out. */
 export function filledCells(rows: readonly GridRow[], index: number): string[] {
-  return rows.map((row) => trimmed(row.cells[index] ?? '')).filter((cell) => cell !== '');
+  const filled: string[] = [];
+  for (const { cells } of rows) {
+    const cell = cells[index];
+    if (cell !== undefined && !isBlank(cell)) filled.push(trimmed(cell));
+  }
+  return filled;
 }

@@ -1,247 +1,162 @@
-import type { Design, Purpose } from '#calc';
-import { nameOf } from './addresses.ts';
-import { hasGuardMark } from './apostrophe-guard.ts';
-import { refusedClaims, type Refusal } from './channel-claims.ts';
+import type { Design } from '#calc';
+import { readCells } from './cell-reading.ts';
+import { checkTag, checkValues } from './checks.ts';
+import { ChoiceReader } from './choices.ts';
 import { countRows } from './counts.ts';
-import { addressOf, blankValues, DesignIndex } from './design-index.ts';
-import { fieldOf } from './fields.ts';
-import { columnIndex, rowNumbered, rowsBelow, type Grid, type GridRow } from './grid.ts';
+import { DesignIndex } from './design-index.ts';
+import { grantChannels } from './grant-channels.ts';
+import { isBlank, rowNumbered, rowsBelow, type GridRow } from './grid.ts';
 import { ImportRefusal } from './import-refusal.ts';
-import type { FieldChange, ImportPlan, ImportSettings, ImportValues, Mapping, PlannedRow, SkipReason } from './plan.ts';
-import { checkValues } from './checks.ts';
-import { RowReading, setSignal, SIGNAL_KEYS, SUBJECTS, type MappedColumn, type ReadingContext } from './row-reading.ts';
-import { skipReason } from './skipped-rows.ts';
+import { isOtherSignal, joinSignals } from './join-signals.ts';
+import { mappedColumns } from './mapped-columns.ts';
+import type { ImportPlan, PlannedRow, SkipReason } from './plan.ts';
+import { plannedRow, skippedRow } from './planned-row.ts';
+import type { FileReading } from './read-file.ts';
+import { RowReading, type ReadingContext } from './row-reading.ts';
+import { RowSkipper } from './skipped-rows.ts';
+import type { SheetPart } from './take-sheets.ts';
+
+const PROGRESS_ROWS = 1_000;
 
 /**
- * Says row by row what an import would do, without doing any of it. The same grid, settings and design
+ * Says row by row what an import would do, without doing any of it. The same file, settings and design
  * always give the same plan; the plan of a file that has been imported says "same" for every sound row.
  *
- * @param grid the file's rows
- * @param settings headings, mapping and decimal sign, as suggested or as a person set them
+ * @param reading the file with its settings, as suggested or as a person set them
  * @param design the project as it is now
+ * @param onProgress told now and then how many rows of how many have been looked at
  * @throws {ImportRefusal} for settings that fit no import: no tag column, a field twice, no rows
  */
-export function interpretGrid(grid: Grid, settings: ImportSettings, design: Design): ImportPlan {
-  const headings = headingRow(grid, settings.headerRow);
-  const columns = mappedColumns(settings.mapping, headings);
-  const ownExport = hasGuardMark(headings.cells);
-  const context: ReadingContext = { settings, columns, index: new DesignIndex(design), ownExport };
-  const rows = planRows(rowsBelow(grid, settings.headerRow), headings, context);
-  return { ownExport, rows, counts: countRows(rows, design.points.length) };
+export function interpretFile(reading: FileReading, design: Design, onProgress?: (done: number, total: number) => void): ImportPlan {
+  const rows = rowsOfFile(reading.parts);
+  const context = contextOf(reading, design);
+  const read = readRows(rows, context, onProgress);
+  const readings: RowReading[] = [];
+  for (const { reading: each } of read) if (each) readings.push(each);
+  if (context.columnOf.has('signalType')) joinSignals(readings);
+  else holdDoubledTags(readings);
+  const kept = readings.filter(({ joined }) => !joined);
+  for (const each of kept) checkRow(each);
+  grantChannels(kept.filter(({ held }) => !held), context.index);
+  const planned = plannedRows(read);
+  return { ownExport: reading.ownExport, rows: planned, counts: countRows(planned, design.points.length) };
 }
 
-function headingRow(grid: Grid, number: number): GridRow {
-  const row = rowNumbered(grid, number);
-  if (!row) {
+/** In the order of the file; a row that another has taken in has no line of its own. */
+function plannedRows(read: readonly RowOfFile[]): PlannedRow[] {
+  const planned: PlannedRow[] = [];
+  for (const { row, part, why, reading } of read) {
+    if (!reading) planned.push(skippedRow(row, part.sheet, why!));
+    else if (!reading.joined) planned.push(plannedRow(reading));
+  }
+  return planned;
+}
+
+interface PartRows {
+  readonly part: SheetPart;
+  readonly rows: readonly GridRow[];
+}
+
+function rowsOfFile(parts: readonly SheetPart[]): PartRows[] {
+  for (const { grid, headerRow, sheet } of parts) {
+    if (rowNumbered(grid, headerRow)) continue;
     throw new ImportRefusal(
       'header-row-outside',
       'There is no such heading row',
-      `The file has no row ${number}.`,
+      `${sheet === null ? 'The file' : `Sheet “${sheet}”`} has no row ${headerRow}.`,
       'Choose the row that holds the headings.',
     );
   }
-  if (rowsBelow(grid, number).length === 0) {
-    throw new ImportRefusal(
-      'no-rows',
-      'There are no rows to import',
-      `Nothing stands below the heading row ${number}.`,
-      'Choose the row that holds the headings, or another file.',
-    );
-  }
-  return row;
+  const all = parts.map((part) => ({ part, rows: rowsBelow(part.grid, part.headerRow) }));
+  if (all.some(({ rows }) => rows.length > 0)) return all;
+  throw new ImportRefusal(
+    'no-rows',
+    'There are no rows to import',
+    `Nothing stands below the heading row ${parts[0].headerRow}.`,
+    'Choose the row that holds the headings, or another file.',
+  );
 }
 
-function mappedColumns(mapping: Mapping, headings: GridRow): MappedColumn[] {
-  const columns = Object.entries(mapping).map(([letter, key]) => ({
-    index: columnIndex(letter),
-    letter,
-    field: fieldOf(key),
-  }));
-  refuseBadMapping(columns, headings);
-  return columns.sort((a, b) => a.index - b.index);
-}
-
-function refuseBadMapping(columns: readonly MappedColumn[], headings: GridRow): void {
-  const outside = columns.find(({ index }) => index < 0 || index >= headings.cells.length);
-  if (outside) {
-    throw new ImportRefusal(
-      'column-outside',
-      'There is no such column',
-      `The file has no column ${outside.letter}.`,
-      'Choose the columns again.',
-    );
-  }
-  const twice = columns.find(({ field }, i) => columns.slice(0, i).some((each) => each.field.key === field.key));
-  if (twice) {
-    throw new ImportRefusal(
-      'field-twice',
-      'Two columns for one thing',
-      `More than one column is mapped to “${twice.field.label}”.`,
-      'Leave out all but one of them.',
-    );
-  }
-  if (!columns.some(({ field }) => field.key === 'tag')) {
-    throw new ImportRefusal(
-      'tag-unmapped',
-      'No column holds the tag',
-      'Points are told apart by their tag.',
-      'Choose the column with the tags.',
-    );
-  }
+function contextOf({ settings, parts, ownExport, format }: FileReading, design: Design): ReadingContext {
+  const columns = mappedColumns(settings.mapping, parts[0].headings.leaves.length);
+  const index = DesignIndex.of(design);
+  return {
+    columns,
+    columnOf: new Map(columns.map((each) => [each.field.key, each])),
+    decimal: settings.decimal,
+    typedNumbers: format === 'workbook',
+    choices: new ChoiceReader(index, settings.valueMapping),
+    index,
+    ownExport,
+    severalSheets: parts.length > 1,
+  };
 }
 
 interface RowOfFile {
+  readonly part: SheetPart;
   readonly row: GridRow;
   readonly why: SkipReason | null;
+  /** Null: the row is skipped. */
   readonly reading: RowReading | null;
 }
 
-function planRows(rows: readonly GridRow[], headings: GridRow, context: ReadingContext): PlannedRow[] {
-  const tagIndex = context.columns.find(({ field }) => field.key === 'tag')!.index;
-  const read = rows.map((row): RowOfFile => {
-    const why = skipReason(row, headings, tagIndex);
-    return { row, why, reading: why === null ? readRow(row, headings, context) : null };
-  });
-  const readings = read.flatMap(({ reading }) => reading ?? []);
-  holdDoubledTags(readings);
-  grantChannels(
-    readings.filter((each) => !each.held),
-    context.index,
-  );
-  return read.map(({ row, why, reading }) => (reading ? plannedRow(reading) : skippedRow(row, why!)));
+function readRows(all: readonly PartRows[], context: ReadingContext, onProgress?: (done: number, total: number) => void): RowOfFile[] {
+  const total = all.reduce((sum, { rows }) => sum + rows.length, 0);
+  const tagIndex = context.columnOf.get('tag')!.index;
+  const isKnown = (tag: string): boolean => context.index.pointByTag.has(tag);
+  const read: RowOfFile[] = [];
+  for (const { part, rows } of all) {
+    const skipper = new RowSkipper(part.headings, tagIndex, isKnown);
+    for (const row of rows) {
+      read.push(readRow(row, part, skipper, context));
+      if (read.length % PROGRESS_ROWS === 0) onProgress?.(read.length, total);
+    }
+  }
+  onProgress?.(total, total);
+  return read;
 }
 
-function readRow(row: GridRow, headings: GridRow, context: ReadingContext): RowReading {
-  const reading = new RowReading(row, context);
-  reading.readCells();
-  checkValues(reading, context.index);
-  reading.findChannels();
-  if (row.cells.slice(headings.cells.length).some((cell) => cell.trim() !== '')) {
-    reading.error(null, {
-      code: 'too-many-cells',
-      message: `The row has ${row.cells.length} cells, the heading row ${headings.cells.length}: its cells may stand under the wrong headings.`,
-      remedy: 'Put a text that contains the delimiter into quotation marks, or give the last column a heading.',
-    });
-  }
-  return reading;
+function readRow(row: GridRow, part: SheetPart, skipper: RowSkipper, context: ReadingContext): RowOfFile {
+  const why = skipper.reason(row);
+  if (why !== null) return { part, row, why, reading: null };
+  const reading = new RowReading(row, part.sheet, context);
+  readCells(reading);
+  if (isOtherSignal(reading)) return { part, row, why: 'other-signal', reading: null };
+  checkTag(reading);
+  refuseSurplusCells(reading, part.headings.leaves.length);
+  return { part, row, why: null, reading };
+}
+
+function refuseSurplusCells(reading: RowReading, headings: number): void {
+  const { cells } = reading.row;
+  if (cells.length <= headings || cells.slice(headings).every(isBlank)) return;
+  reading.error(null, {
+    code: 'too-many-cells',
+    message: `The row has ${cells.length} cells, the heading row ${headings}: its cells may stand under the wrong headings.`,
+    remedy: 'Put a text that contains the delimiter into quotation marks, or give the last column a heading.',
+  });
 }
 
 function holdDoubledTags(readings: readonly RowReading[]): void {
-  const first = new Map<string, number>();
+  const first = new Map<string, RowReading>();
   for (const reading of readings) {
     const { tag } = reading.values;
     if (tag === null) continue;
     const seen = first.get(tag);
-    if (seen === undefined) first.set(tag, reading.row.number);
+    if (seen === undefined) first.set(tag, reading);
     else {
       reading.error('tag', {
         code: 'tag-doubled',
-        message: `The tag ${tag} is on row ${seen} already.`,
+        message: `The tag ${tag} is on ${seen.place} already.`,
         remedy: 'Give this point a tag of its own, or delete the row.',
       });
     }
   }
 }
 
-function grantChannels(readings: readonly RowReading[], index: DesignIndex): void {
-  for (const refusal of refusedClaims(readings, index)) reportTaken(refusal);
-  for (const reading of readings) {
-    keepControllerTogether(reading, index);
-    for (const purpose of ['control', 'status'] as const) {
-      const granted = reading.wants[purpose];
-      if (granted)
-        setSignal(
-          reading.values,
-          purpose,
-          granted.module.name,
-          granted.channel,
-          addressOf(granted.module, granted.channel),
-        );
-    }
-  }
-}
-
-function reportTaken({ reading, purpose, holder }: Refusal): void {
-  const wanted = reading.wants[purpose]!;
-  const keys = SIGNAL_KEYS[purpose];
-  const address = addressOf(wanted.module, wanted.channel);
-  reading.dropSignal(purpose);
-  reading.warn(
-    SUBJECTS[purpose],
-    {
-      code: purpose === 'control' ? 'output-taken' : 'input-taken',
-      message: `${reading.controller!.name} ${address} (${nameOf(wanted)}) is taken by ${holder}.`,
-      remedy: 'Choose another channel, or assign one after the import.',
-    },
-    reading.filled(keys.address) ? keys.address : keys.channel,
-  );
-}
-
-/** A point cannot change its controller while a channel of the old one stays assigned to it. */
-function keepControllerTogether(reading: RowReading, index: DesignIndex): void {
-  const dispenser = reading.point ? index.dispenserByPoint.get(reading.point.id) : undefined;
-  const left = (['control', 'status'] as const).some((purpose: Purpose) => {
-    const assigned = index.assignmentOf(dispenser, purpose);
-    const stays = assigned && !reading.wants[purpose];
-    return (
-      stays &&
-      reading.controller !== null &&
-      index.moduleById.get(assigned.moduleId)?.controllerId !== reading.controller.id
-    );
-  });
-  if (!left) return;
-  reading.dropSignal('control');
-  reading.dropSignal('status');
-  reading.values.controller = null;
-  reading.warn('controller', {
-    code: 'controller-contradiction',
-    message: `The point has a channel of ${reading.existing.controller ?? 'another controller'} that the list does not replace. Its channels stay as they are.`,
-    remedy: 'Give output and status of the new controller in the list, or take the channels off the point first.',
-  });
-}
-
-function plannedRow(reading: RowReading): PlannedRow {
-  const { row, values, point, held } = reading;
-  const changes = held || !point ? [] : changesBetween(reading.existing, values);
-  return {
-    row: row.number,
-    line: row.line,
-    action: held ? 'hold' : !point ? 'create' : changes.length > 0 ? 'update' : 'same',
-    why: null,
-    pointId: point?.id ?? null,
-    values,
-    changes,
-    problems: [...reading.problems].sort((a, b) => columnIndex(a.column ?? 'A') - columnIndex(b.column ?? 'A')),
-    notes: held ? [] : reading.notes,
-  };
-}
-
-function skippedRow(row: GridRow, why: SkipReason): PlannedRow {
-  return {
-    row: row.number,
-    line: row.line,
-    action: 'skip',
-    why,
-    pointId: null,
-    values: blankValues(),
-    changes: [],
-    problems: [],
-    notes: [],
-  };
-}
-
-/** What the file says and the project does not; a blank cell says nothing and changes nothing. */
-function changesBetween(old: ImportValues, values: ImportValues): FieldChange[] {
-  return (Object.keys(values) as (keyof ImportValues)[]).flatMap((field) => {
-    const to = values[field];
-    const from = old[field];
-    return to === null || alike(from, to) ? [] : [{ field, from, to }];
-  });
-}
-
-/** Line ends inside a text and blanks around it are no change: spreadsheet programs rewrite both. */
-function alike(from: string | number | null, to: string | number): boolean {
-  const plain = (value: string | number | null): string | number | null =>
-    typeof value === 'string' ? value.replace(/\r\n?/g, '\n').trim() : value;
-  return plain(from) === plain(to);
+/** Values are checked once all rows of a point have said theirs. */
+function checkRow(reading: RowReading): void {
+  reading.findPoint();
+  checkValues(reading);
+  reading.findChannels();
 }

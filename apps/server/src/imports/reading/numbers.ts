@@ -105,6 +105,28 @@ export function foldFullWidth(text: string): string {
   return text.replace(/[\uff01-\uff5e]/g, (each) => String.fromCharCode(each.charCodeAt(0) - 0xfee0));
 }
 
+const [ZERO, NINE, MINUS] = [48, 57, 45];
+const MARKS: Readonly<Record<DecimalMark, number>> = { '.': 46, ',': 44 };
+
+/**
+ * Reads what nearly every number cell holds: digits, at most one decimal sign among them, a minus before
+ * them. It is but the short way; `readNumber` gives the same for these.
+ *
+ * @returns NaN for everything else
+ */
+export function plainNumber(text: string, decimal: DecimalMark): number {
+  if (text.length > LONGEST_NUMBER) return NaN;
+  const mark = MARKS[decimal];
+  let place = -1;
+  for (let i = 0; i < text.length; i += 1) {
+    const code = text.charCodeAt(i);
+    if (code >= ZERO && code <= NINE) continue;
+    if (code === mark && place < 0 && i < text.length - 1) place = i;
+    else if (code !== MINUS || i > 0) return NaN;
+  }
+  return place >= 0 && decimal === ',' ? Number(text.replace(',', '.')) : Number(text);
+}
+
 /**
  * Reads a number as plants write them: the file's decimal sign, groups of three parted by the other sign,
  * a blank, a no-break space or an apostrophe, the field's own unit behind it. What is read otherwise than
@@ -142,16 +164,17 @@ interface Digits {
   readonly grouped: boolean;
 }
 
+const UNGROUPED: Readonly<Record<DecimalMark, RegExp>> = { '.': /^\d*(?:\.\d+)?$/, ',': /^\d*(?:,\d+)?$/ };
+
+/** A group never begins with 0: 0,300 in a file with decimal points is no 300. */
+const GROUPED: Readonly<Record<DecimalMark, RegExp>> = {
+  '.': /^[1-9]\d{0,2}([,'’ \u00a0\u202f\u2007\u2009])\d{3}(?:\1\d{3})*(?:\.\d+)?$/,
+  ',': /^[1-9]\d{0,2}([.'’ \u00a0\u202f\u2007\u2009])\d{3}(?:\1\d{3})*(?:,\d+)?$/,
+};
+
 function readDigits(digits: string, decimal: DecimalMark): Digits | null {
-  const point = decimal === '.' ? '\\.' : ',';
-  const other = decimal === '.' ? ',' : '\\.';
-  if (new RegExp(`^\\d*(?:${point}\\d+)?$`).test(digits))
-    return { plain: digits.replace(decimal, '.'), grouped: false };
-  // a group never begins with 0: 0,300 in a file with decimal points is no 300
-  const grouping = new RegExp(
-    `^[1-9]\\d{0,2}([${other}'’ \\u00a0\\u202f\\u2007\\u2009])\\d{3}(?:\\1\\d{3})*(?:${point}\\d+)?$`,
-  );
-  if (!grouping.test(digits)) return null;
+  if (UNGROUPED[decimal].test(digits)) return { plain: digits.replace(decimal, '.'), grouped: false };
+  if (!GROUPED[decimal].test(digits)) return null;
   const [whole, part] = digits.split(decimal) as [string, string | undefined];
   const joined = whole.replace(/\D/g, '');
   return { plain: part === undefined ? joined : `${joined}.${part}`, grouped: true };

@@ -1,5 +1,5 @@
-import type { Assignment, Design, Dispenser, Point, Purpose, Uuid } from '#calc';
-import { DesignIndex, nameKey } from './design-index.ts';
+import type { Assignment, Design, Dispenser, Point, Uuid } from '#calc';
+import { DesignIndex } from './design-index.ts';
 import type { ImportPlan, ImportValues, PlannedRow } from './plan.ts';
 import { SIGNAL_KEYS } from './row-reading.ts';
 
@@ -34,7 +34,7 @@ interface Collected {
  * @param newId gives the ids of new rows
  */
 export function changesOf(plan: ImportPlan, design: Design, newId: () => Uuid): ImportChanges {
-  const index = new DesignIndex(design);
+  const index = DesignIndex.of(design);
   const changes: Collected = {
     points: { create: [], update: [] },
     dispensers: { create: [], update: [] },
@@ -48,11 +48,11 @@ export function changesOf(plan: ImportPlan, design: Design, newId: () => Uuid): 
 }
 
 function createPoint({ values }: PlannedRow, index: DesignIndex, newId: () => Uuid, changes: Collected): void {
-  const point: Point = { ...newPoint(newId(), values.tag!), ...pointFields(values, index) };
-  const dispenser: Dispenser = { ...newDispenser(newId(), point.id), ...dispenserFields(values, index) };
+  const point: Point = Object.assign(newPoint(newId(), values.tag!), pointFields(values, index));
+  const dispenser: Dispenser = Object.assign(newDispenser(newId(), point.id), dispenserFields(values, index));
   changes.points.create.push(point);
   changes.dispensers.create.push(dispenser);
-  assign(values, dispenser, index, newId, changes);
+  assign(values, dispenser, values.controller, index, newId, changes);
 }
 
 function updatePoint(row: PlannedRow, index: DesignIndex, newId: () => Uuid, changes: Collected): void {
@@ -62,13 +62,14 @@ function updatePoint(row: PlannedRow, index: DesignIndex, newId: () => Uuid, cha
   if (Object.keys(forPoint).length > 0) changes.points.update.push({ id: point.id, fields: forPoint });
   const forDispenser = dispenserFields(changed, index);
   const existing = index.dispenserByPoint.get(point.id);
+  const controller = row.values.controller ?? index.valuesOf(point).controller;
   if (existing) {
     if (Object.keys(forDispenser).length > 0) changes.dispensers.update.push({ id: existing.id, fields: forDispenser });
-    assign(changed, { ...existing, ...forDispenser }, index, newId, changes);
+    assign(changed, { ...existing, ...forDispenser }, controller, index, newId, changes);
   } else if (saysOfDispenser(changed, forDispenser)) {
     const dispenser = { ...newDispenser(newId(), point.id), ...forDispenser };
     changes.dispensers.create.push(dispenser);
-    assign(changed, dispenser, index, newId, changes);
+    assign(changed, dispenser, controller, index, newId, changes);
   }
 }
 
@@ -92,43 +93,49 @@ const DISPENSER_VALUES = ['wiring', 'cartridgeUl', 'doseUl', 'cableTag', 'cableL
 
 /** Columns of the point that these values fill; blank ones are left out. */
 function pointFields(values: Partial<ImportValues>, index: DesignIndex, old?: Point): Partial<Draft<Point>> {
-  const greaseId = values.grease ? index.greaseNamed(values.grease)!.id : undefined;
-  return {
-    ...given(values, POINT_TEXTS),
-    ...given(values, POINT_NUMBERS),
-    ...demandFields(values, old),
-    ...(greaseId && { greaseId }),
-  } as Partial<Draft<Point>>;
+  const fields: Partial<Draft<Point>> = {};
+  give(fields, values, POINT_TEXTS);
+  give(fields, values, POINT_NUMBERS);
+  addDemand(fields, values, old);
+  if (values.grease) fields.greaseId = index.greaseNamed(values.grease)!.id;
+  return fields;
 }
 
 /** A stated demand counts before a bearing; a bearing alone decides only where nobody has decided yet. */
-function demandFields(values: Partial<ImportValues>, old?: Point): Partial<Draft<Point>> {
+function addDemand(fields: Partial<Draft<Point>>, values: Partial<ImportValues>, old?: Point): void {
   const { demandUlPer100h, demandUlPer1000h } = values;
-  if (demandUlPer100h != null) return { demandWay: 'stated', statedUl: demandUlPer100h, statedPer: '100h' };
-  if (demandUlPer1000h != null) return { demandWay: 'stated', statedUl: demandUlPer1000h, statedPer: '1000h' };
-  const bearing = [values.boreMm, values.outsideMm, values.widthMm].some((each) => each != null);
-  return bearing && (old?.demandWay ?? null) === null ? { demandWay: 'bearing' } : {};
+  const stated = demandUlPer100h ?? demandUlPer1000h;
+  if (stated != null) {
+    fields.demandWay = 'stated';
+    fields.statedUl = stated;
+    fields.statedPer = demandUlPer100h != null ? '100h' : '1000h';
+  } else if ((values.boreMm ?? values.outsideMm ?? values.widthMm) != null && (old?.demandWay ?? null) === null) {
+    fields.demandWay = 'bearing';
+  }
 }
 
 /** Columns of the dispenser that these values fill; blank ones are left out. */
 function dispenserFields(values: Partial<ImportValues>, index: DesignIndex): Partial<Draft<Dispenser>> {
   const { dispenserType, controller, circuit, junctionBox } = values;
-  return {
-    ...given(values, DISPENSER_VALUES),
-    ...(dispenserType && { typeId: index.typeNamed(dispenserType)!.id }),
-    ...(controller && { controllerId: index.controllerNamed(controller)!.id }),
-    ...(circuit && { circuitId: index.circuitNamed(circuit)!.id }),
-    ...(junctionBox && { nodeId: index.boxNamed(junctionBox)!.id }),
-  };
+  const fields: Partial<Draft<Dispenser>> = {};
+  give(fields, values, DISPENSER_VALUES);
+  if (dispenserType) fields.typeId = index.typeNamed(dispenserType)!.id;
+  if (controller) fields.controllerId = index.controllerNamed(controller)!.id;
+  if (circuit) fields.circuitId = index.circuitNamed(circuit)!.id;
+  if (junctionBox) fields.nodeId = index.boxNamed(junctionBox)!.id;
+  return fields;
 }
 
-function given(values: Partial<ImportValues>, keys: readonly (keyof ImportValues)[]): Partial<ImportValues> {
-  return Object.fromEntries(keys.filter((key) => values[key] != null).map((key) => [key, values[key]]));
+/** Columns that are named and typed as the values are. */
+function give<K extends keyof ImportValues>(fields: Partial<Record<K, ImportValues[K]>>, values: Partial<ImportValues>, keys: readonly K[]): void {
+  for (const key of keys) if (values[key] != null) fields[key] = values[key];
 }
 
+/** @param controller the name of the controller whose channels the row means */
 function assign(
   values: Partial<ImportValues>,
   dispenser: Dispenser,
+  controller: string | null,
   index: DesignIndex,
   newId: () => Uuid,
   changes: Collected,
@@ -137,19 +144,14 @@ function assign(
     const keys = SIGNAL_KEYS[purpose];
     const channel = values[keys.channel];
     if (channel == null) continue;
-    const module = moduleNamed(values[keys.module]!, dispenser.controllerId, purpose, index);
+    const name = values[keys.module]!;
+    const owner = controller === null ? undefined : index.controllerNamed(controller);
+    const module = owner && index.moduleNamed(owner.id, name);
+    if (!module) throw new Error(`The plan names a ${purpose} module ${name} that its design does not have.`);
     const old = index.assignmentOf(dispenser, purpose);
     if (old) changes.assignments.remove.push(old.id);
-    changes.assignments.create.push({ id: newId(), dispenserId: dispenser.id, moduleId: module, channel, purpose });
+    changes.assignments.create.push({ id: newId(), dispenserId: dispenser.id, moduleId: module.id, channel, purpose });
   }
-}
-
-function moduleNamed(name: string, controllerId: Uuid | null, purpose: Purpose, index: DesignIndex): Uuid {
-  const found = [...index.moduleById.values()].find(
-    (each) => each.controllerId === controllerId && nameKey(each.name) === nameKey(name),
-  );
-  if (!found) throw new Error(`The plan names a ${purpose} module ${name} that its design does not have.`);
-  return found.id;
 }
 
 function newPoint(id: Uuid, tag: string): Point {

@@ -1,11 +1,11 @@
 import type { Uuid, Wiring } from '#calc';
 import type { DecimalMark } from './grid.ts';
-import type { FieldKey, ValueKey } from './fields.ts';
+import type { FieldKey, SignalKey, ValueKey } from './fields.ts';
 
 /** What a person chose, or took over from the suggestions. */
 export interface ImportSettings {
   readonly decimal: DecimalMark;
-  /** Number of the row that holds the headings. */
+  /** Number of the lowest row of the headings; in a workbook that of the first sheet taken. */
   readonly headerRow: number;
   readonly mapping: Mapping;
   readonly valueMapping?: ValueMapping;
@@ -64,6 +64,10 @@ export type ProblemCode =
   | 'tag-doubled'
   | 'tag-too-long'
   | 'too-many-cells'
+  | 'signal-type-missing'
+  | 'signal-type-unknown'
+  | 'signal-doubled'
+  | 'rows-differ'
   | 'not-a-number'
   | 'other-unit'
   | 'not-positive'
@@ -103,7 +107,7 @@ export interface Fault {
 }
 
 /** The value a problem or note belongs to; `output` and `status` stand for module, channel and address together. */
-export type Subject = ValueKey | 'output' | 'status';
+export type Subject = ValueKey | SignalKey | 'output' | 'status';
 
 /** An error holds the row back; a warning leaves its value blank and imports the rest. */
 export interface Problem extends Fault {
@@ -118,14 +122,15 @@ export interface Problem extends Fault {
 /** Something read otherwise than it stands, without doubt about what is meant. */
 export interface Note {
   readonly code: NoteCode;
-  readonly field: ValueKey;
+  readonly field: ValueKey | SignalKey;
   readonly column: string;
   readonly cell: string;
   readonly message: string;
 }
 
 export type RowAction = 'create' | 'update' | 'same' | 'hold' | 'skip';
-export type SkipReason = 'blank' | 'repeated-heading' | 'totals';
+/** `other-signal`: the row stands for a signal that no dispenser has. */
+export type SkipReason = 'blank' | 'repeated-heading' | 'totals' | 'other-signal';
 
 /** One value of a point that the import changes. */
 export interface FieldChange {
@@ -135,8 +140,12 @@ export interface FieldChange {
 }
 
 export interface PlannedRow {
+  /** The sheet of a workbook; null in a CSV. */
+  readonly sheet: string | null;
   readonly row: number;
   readonly line: number;
+  /** Every row of the file that makes this point, `row` first; more than one where each row is a signal. */
+  readonly rows: readonly number[];
   readonly action: RowAction;
   /** Why the row is skipped; null for all other actions. */
   readonly why: SkipReason | null;
@@ -151,7 +160,7 @@ export interface PlannedRow {
 }
 
 export interface ImportCounts {
-  /** Rows of data: all but the skipped ones. */
+  /** Rows of the file with data: all but the skipped ones. The other counts are of points. */
   readonly rows: number;
   readonly toCreate: number;
   readonly toUpdate: number;

@@ -1,12 +1,11 @@
 import type { Controller, Point, Purpose } from '#calc';
 import { resolveSignal, type Channel, type SignalTexts } from './addresses.ts';
-import { unguardText } from './apostrophe-guard.ts';
-import { blankValues, type DesignIndex } from './design-index.ts';
-import type { Field, FieldKey } from './fields.ts';
-import { trimmed, type GridRow } from './grid.ts';
-import { foldFullWidth, meansBlank, readNumber } from './numbers.ts';
-import type { DraftValues, Fault, ImportSettings, ImportValues, Note, NoteCode, Problem, Subject } from './plan.ts';
-import { isChoice, isMappedToBlank, readChoice, unknownChoice } from './values.ts';
+import type { ChoiceReader } from './choices.ts';
+import type { DesignIndex } from './design-index.ts';
+import type { Field, FieldKey, SignalKey } from './fields.ts';
+import { isBlank, type DecimalMark, type GridRow } from './grid.ts';
+import { adoptAlike, BLANK_VALUES, blankValues } from './import-values.ts';
+import type { DraftValues, Fault, ImportValues, Note, Problem, Subject } from './plan.ts';
 
 /** A column that the mapping uses. */
 export interface MappedColumn {
@@ -17,58 +16,87 @@ export interface MappedColumn {
 
 /** What does not differ from row to row. */
 export interface ReadingContext {
-  readonly settings: ImportSettings;
   readonly columns: readonly MappedColumn[];
+  readonly columnOf: ReadonlyMap<FieldKey, MappedColumn>;
+  readonly decimal: DecimalMark;
+  /** The file is a workbook: its numbers have a decimal point, whatever the sign in its texts. */
+  readonly typedNumbers: boolean;
+  readonly choices: ChoiceReader;
   readonly index: DesignIndex;
   readonly ownExport: boolean;
+  /** Rows of several sheets are read, so that a row number alone does not say enough. */
+  readonly severalSheets: boolean;
 }
 
-const NOTE_TEXTS: Readonly<Record<NoteCode, string>> = {
-  'read-as-blank': 'Read as blank.',
-  'grouping-removed': 'The sign that parts groups of three digits is left out.',
-  'unit-removed': 'The unit is left out; it is the one of the column.',
-  'full-width-folded': 'Full-width digits are read as plain ones.',
-  'spaces-removed': 'No-break spaces around the value are left out.',
-};
+/** What a row says of the signal that it stands for. */
+export type OwnSignal = Record<SignalKey, string | number | null>;
 
-/** A row while it is read: values found so far, and everything noticed on the way. */
+// Most rows have none of these: what is empty is shared, since a list may have a hundred thousand rows.
+const NO_PROBLEMS: Problem[] = [];
+const NO_NOTES: Note[] = [];
+const NOTHING_WANTED = { control: null, status: null };
+const NO_SIGNAL_ROWS = { control: null, status: null };
+
+/**
+ * A row while it is read: values found so far, and everything noticed on the way. Where each row is a
+ * signal, the first row of a point takes in what its other rows say.
+ */
 export class RowReading {
   readonly values: DraftValues = blankValues();
-  readonly problems: Problem[] = [];
-  readonly notes: Note[] = [];
+  problems: readonly Problem[] = NO_PROBLEMS;
+  notes: readonly Note[] = NO_NOTES;
+  /** Whether an error holds the row back. */
+  held = false;
   /** The channels it asks for, once they are known to exist. */
-  readonly wants: Record<Purpose, Channel | null> = { control: null, status: null };
+  wants: Readonly<Record<Purpose, Channel | null>> = NOTHING_WANTED;
   point: Point | null = null;
   /** What the project says of the point already. */
-  existing: ImportValues = blankValues();
+  existing: ImportValues = BLANK_VALUES;
   /** The controller whose channels the row means. */
   controller: Controller | null = null;
-  private readonly faulty = new Set<FieldKey>();
+  /** Null until the row says something of a signal of its own. */
+  own: OwnSignal | null = null;
+  /** The rows that this point is read from, once another row has joined it; null: this one alone. */
+  rows: RowReading[] | null = null;
+  /** Whether another row of the same point has taken this one in. */
+  joined = false;
+  /** The row that stands for the signal of each purpose. */
+  signalRow: Readonly<Record<Purpose, RowReading | null>> = NO_SIGNAL_ROWS;
+  /** Fields whose cell says something that cannot be read. */
+  private faulty: Set<FieldKey> | null = null;
 
   constructor(
     readonly row: GridRow,
-    private readonly context: ReadingContext,
+    readonly sheet: string | null,
+    readonly context: ReadingContext,
   ) {}
 
-  get held(): boolean {
-    return this.problems.some((each) => each.severity === 'error');
+  /** The row as a message names it. */
+  get place(): string {
+    return this.context.severalSheets ? `row ${this.row.number} of sheet “${this.sheet}”` : `row ${this.row.number}`;
   }
 
-  /** Reads every mapped cell and finds the point it speaks of. */
-  readCells(): void {
-    for (const column of this.context.columns) this.readCell(column);
-    this.findPoint();
+  /** Finds the point that the row speaks of, and takes what the project has where the file says no more. */
+  findPoint(): void {
+    const { index } = this.context;
+    this.point = (this.values.tag !== null && index.pointByTag.get(this.values.tag)) || null;
+    if (!this.point) return;
+    this.existing = index.valuesOf(this.point);
+    adoptAlike(this.values, this.existing);
   }
 
   /** Finds the channels that the checked values ask for. */
   findChannels(): void {
-    this.findController();
-    this.resolve('control');
-    this.resolve('status');
+    const { values } = this;
+    const name = values.controller ?? (this.isFaulty('controller') ? null : this.existing.controller);
+    this.controller = (name !== null && this.context.index.controllerNamed(name)) || null;
+    if (values.outputModule !== null || values.outputChannel !== null || values.outputAddress !== null) this.resolve('control');
+    if (values.statusModule !== null || values.statusChannel !== null || values.statusAddress !== null) this.resolve('status');
   }
 
   /** Holds the row back. */
   error(subject: Subject | null, fault: Fault): void {
+    this.held = true;
     this.add('error', subject, fault);
   }
 
@@ -77,133 +105,108 @@ export class RowReading {
     this.add('warning', subject, fault, key);
   }
 
+  note(note: Note): void {
+    if (this.notes === NO_NOTES) this.notes = [];
+    (this.notes as Note[]).push(note);
+  }
+
+  /** Whether the cell of this field says something that cannot be read. */
+  isFaulty(key: FieldKey): boolean {
+    return this.faulty !== null && this.faulty.has(key);
+  }
+
+  markFaulty(key: FieldKey): void {
+    (this.faulty ??= new Set()).add(key);
+  }
+
+  get faultyFields(): Iterable<FieldKey> {
+    return this.faulty ?? [];
+  }
+
   /** Whether the column mapped to this field has content in this row. */
   filled(key: FieldKey): boolean {
-    const column = this.context.columns.find(({ field }) => field.key === key);
-    return column !== undefined && trimmed(this.cell(column)) !== '';
+    const column = this.columnFor(null, key);
+    return column !== undefined && !isBlank(this.sourceOf(column, key).cell(column));
   }
 
   /** Takes a channel away again. */
   dropSignal(purpose: Purpose): void {
-    this.wants[purpose] = null;
+    this.wants = { ...this.wants, [purpose]: null };
     setSignal(this.values, purpose, null, null, null);
+  }
+
+  cell({ index }: MappedColumn): string {
+    return this.row.cells[index] ?? '';
+  }
+
+  /** Takes over a problem as it is. */
+  keep(problem: Problem): void {
+    if (this.problems === NO_PROBLEMS) this.problems = [];
+    (this.problems as Problem[]).push(problem);
   }
 
   private add(severity: Problem['severity'], subject: Subject | null, fault: Fault, key?: FieldKey): void {
     const column = this.columnFor(subject, key);
-    this.problems.push({
-      ...fault,
+    const source = column ? this.sourceOf(column, key) : this;
+    this.keep({
+      ...(this.rows && column ? placed(fault, source) : fault),
       severity,
       field: subject,
       column: column?.letter ?? null,
-      cell: column ? this.cell(column) : null,
+      cell: column ? source.cell(column) : null,
     });
   }
 
   private columnFor(subject: Subject | null, key?: FieldKey): MappedColumn | undefined {
-    const { columns } = this.context;
-    return columns.find(({ field }) => field.key === key) ?? columns.find(({ field }) => field.value === subject);
+    const { columns, columnOf } = this.context;
+    const own = key && OWN_KEYS[key];
+    return (key && columnOf.get(key)) ?? (own && columnOf.get(own.key)) ?? columns.find(({ field }) => field.value === subject);
   }
 
-  private cell(column: MappedColumn): string {
-    return this.row.cells[column.index] ?? '';
-  }
-
-  private readCell(column: MappedColumn): void {
-    const whole = this.context.ownExport ? unguardText(this.cell(column)) : this.cell(column);
-    const text = trimmed(whole);
-    const noted: NoteCode[] = hasOuterNoBreakSpace(whole) ? ['spaces-removed'] : [];
-    if (text !== '') this.readText(column, text, noted);
-    for (const code of noted) {
-      this.notes.push({
-        code,
-        field: column.field.value,
-        column: column.letter,
-        cell: this.cell(column),
-        message: NOTE_TEXTS[code],
-      });
-    }
-  }
-
-  private readText(column: MappedColumn, text: string, noted: NoteCode[]): void {
-    const { field } = column;
-    if (field.kind === 'text') this.set(field, text);
-    else if (field.kind === 'choice') this.readChoiceCell(field, text, noted);
-    else if (field.kind === 'module' || field.kind === 'address') this.readName(field, text, noted);
-    else this.readNumberCell(field, text, noted);
-  }
-
-  private readName(field: Field, text: string, noted: NoteCode[]): void {
-    const plain = foldFullWidth(text);
-    if (plain !== text) noted.push('full-width-folded');
-    if (meansBlank(plain)) noted.push('read-as-blank');
-    else this.set(field, plain);
-  }
-
-  private readChoiceCell(field: Field, text: string, noted: NoteCode[]): void {
-    const { settings, index } = this.context;
-    const { key } = field;
-    if (!isChoice(key)) return;
-    const value = readChoice(key, text, settings.valueMapping, index);
-    if (value !== null) this.set(field, value);
-    else if (isMappedToBlank(key, text, settings.valueMapping) || meansBlank(text)) noted.push('read-as-blank');
-    else this.fail(field, unknownChoice(key, text, index));
-  }
-
-  private readNumberCell(field: Field, text: string, noted: NoteCode[]): void {
-    const reading = readNumber(text, this.context.settings.decimal, field.units);
-    if (reading.fault) return this.fail(field, reading.fault);
-    noted.push(...reading.notes);
-    if (reading.value === null) return;
-    if (field.kind !== 'volume') return this.set(field, reading.value);
-    const microlitres = Math.round(reading.value * 1000);
-    if (Math.abs(reading.value * 1000 - microlitres) < 1e-6) return this.set(field, microlitres);
-    this.fail(field, {
-      code: field.key === 'doseCm3' ? 'dose-step' : 'volume-too-fine',
-      message: `${text} cm³ is no whole number of microlitres.`,
-      remedy: 'Round it to three decimals.',
-    });
-  }
-
-  private fail(field: Field, fault: Fault): void {
-    this.faulty.add(field.key);
-    this.warn(field.value, fault);
-  }
-
-  private set(field: Field, value: string | number): void {
-    (this.values as Record<string, string | number | null>)[field.value] = value;
-  }
-
-  private findPoint(): void {
-    const { index } = this.context;
-    this.point = (this.values.tag !== null && index.pointByTag.get(this.values.tag)) || null;
-    if (this.point) this.existing = index.valuesOf(this.point);
-  }
-
-  private findController(): void {
-    const name = this.values.controller ?? (this.faulty.has('controller') ? null : this.existing.controller);
-    this.controller = (name !== null && this.context.index.controllerNamed(name)) || null;
+  /** The row of the point whose cell in this column is meant. */
+  private sourceOf(column: MappedColumn, key?: FieldKey): RowReading {
+    if (!this.rows) return this;
+    const own = key && OWN_KEYS[key];
+    const byPurpose = own?.key === column.field.key ? this.signalRow[own.purpose] : null;
+    return byPurpose ?? this.rows.find((each) => !isBlank(each.cell(column))) ?? this;
   }
 
   private resolve(purpose: Purpose): void {
     const keys = SIGNAL_KEYS[purpose];
     const texts = signalOf(this.values, purpose);
     setSignal(this.values, purpose, null, null, null);
-    const unread = Object.values(keys).some((key) => this.faulty.has(key));
-    const blank = texts.module === null && texts.channel === null && texts.address === null;
     // a part that cannot be read, or a controller that is not known, has been reported already
-    if (blank || unread || this.faulty.has('controller')) return;
+    if (this.isFaulty(keys.module) || this.isFaulty(keys.channel) || this.isFaulty(keys.address)) return;
+    if (this.isFaulty('controller') && this.values.controller === null) return;
     const found = resolveSignal(texts, purpose, this.controller, this.context.index);
     if (found.fault) return this.warn(SUBJECTS[purpose], found.fault, keys[found.said]);
-    this.wants[purpose] = found.channel;
+    this.wants = { ...this.wants, [purpose]: found.channel };
   }
 }
+
+/** Says first which row of a point is meant. */
+export function placed<T extends { readonly message: string }>(said: T, { place }: RowReading): T {
+  return { ...said, message: `${place[0].toUpperCase()}${place.slice(1)}: ${said.message}` };
+}
+
+/** What a row says of where its own signal is. */
+export const OWN_PARTS = ['module', 'channel', 'address'] as const;
 
 /** How a signal's parts and the whole of it are called. */
 export const SIGNAL_KEYS = {
   control: { module: 'outputModule', channel: 'outputChannel', address: 'outputAddress' },
   status: { module: 'statusModule', channel: 'statusChannel', address: 'statusAddress' },
 } as const;
+
+/** The same part where it stands in a row's own signal. */
+const OWN_KEYS: Readonly<Partial<Record<FieldKey, { readonly key: SignalKey; readonly purpose: Purpose }>>> = {
+  outputModule: { key: 'module', purpose: 'control' },
+  outputChannel: { key: 'channel', purpose: 'control' },
+  outputAddress: { key: 'address', purpose: 'control' },
+  statusModule: { key: 'module', purpose: 'status' },
+  statusChannel: { key: 'channel', purpose: 'status' },
+  statusAddress: { key: 'address', purpose: 'status' },
+};
 
 export const SUBJECTS = { control: 'output', status: 'status' } as const;
 
@@ -224,8 +227,4 @@ export function setSignal(
   values[keys.module] = module;
   values[keys.channel] = channel;
   values[keys.address] = address;
-}
-
-function hasOuterNoBreakSpace(cell: string): boolean {
-  return /^\s*[\u00a0\u202f\u2007]|[\u00a0\u202f\u2007]\s*$/u.test(cell);
 }

@@ -5,17 +5,20 @@ import { readCsv } from './csv-grid.ts';
 import { detectDecimalMark } from './decimal-mark.ts';
 import { FIELDS, headingOf, type FieldKey } from './fields.ts';
 import { rowsBelow } from './grid.ts';
-import { detectHeaderRow } from './header-row.ts';
+import { findHeaderRow } from './header-row.ts';
+import { headingsAt } from './heading-block.ts';
+import { NOTHING_REMEMBERED } from './remembered.ts';
 import { mappingOf, suggestMapping } from './suggest-mapping.ts';
 
 function suggested(text: string): Record<string, FieldKey> {
   const { grid } = readCsv(text);
-  return mappingOf(suggestMapping(grid, detectHeaderRow(grid), brackwaterSetup()));
+  const headerRow = findHeaderRow(grid)!.number;
+  return mappingOf(suggestMapping(headingsAt(grid, headerRow, []), rowsBelow(grid, headerRow), brackwaterSetup(), NOTHING_REMEMBERED));
 }
 
 describe('suggesting a mapping', () => {
   it('finds every field by the heading of our own lists', () => {
-    const found = Object.values(suggested(`${markHeadings(FIELDS.map(({ key }) => headingOf(key))).join(';')}\nA\n`));
+    const found = Object.values(suggested(`${markHeadings(FIELDS.map(({ key }) => headingOf(key)), '.').join(';')}\nA\n`));
     expect(found).toEqual(FIELDS.map(({ key }) => key));
   });
 
@@ -59,11 +62,11 @@ describe('suggesting a mapping', () => {
 describe('finding the heading row', () => {
   it('passes title lines and blank rows above it', () => {
     const { grid } = readCsv('Brackwater Terminal;;\nIssue C, 2 March;;\n;;\nTag;Description;Dose cm³\nA1;x;0,3\n');
-    expect(detectHeaderRow(grid)).toBe(4);
+    expect(findHeaderRow(grid)).toEqual({ number: 4, named: 3 });
   });
 
   it('takes the first full row of texts when no heading is known', () => {
-    expect(detectHeaderRow(readCsv('List;;\nFoo;Bar;Baz\nA;1;2\n').grid)).toBe(2);
+    expect(findHeaderRow(readCsv('List;;\nFoo;Bar;Baz\nA;1;2\n').grid)?.number).toBe(2);
   });
 });
 
@@ -77,6 +80,6 @@ describe('finding the decimal sign', () => {
     [['95,5 m'], ','],
   ])('of %j is %s', (cells, mark) => {
     const { grid } = readCsv(`Tag;Length m\n${cells.map((cell, i) => `A${i};${cell}`).join('\n')}\n`, ';');
-    expect(detectDecimalMark(rowsBelow(grid, 1), { B: 'cableLengthM' }, ';')).toBe(mark);
+    expect(detectDecimalMark([rowsBelow(grid, 1)], { B: 'cableLengthM' }, ';')).toBe(mark);
   });
 });

@@ -1,15 +1,7 @@
 import { describe, expect, it } from 'vitest';
-import type { Design } from '#calc';
 import { brackwaterSetup, countingIds, tagListBytes, tagListExpectation } from '#support/brackwater-setup.ts';
-import {
-  changesOf,
-  interpretGrid,
-  readCsvFile,
-  type CsvFileReading,
-  type ImportPlan,
-  type ImportValues,
-  type ValueMapping,
-} from './index.ts';
+import { changesOf, interpretFile, type ImportValues, type ValueMapping } from './index.ts';
+import { importOf } from './testing/plan-of.ts';
 import { withChanges } from './testing/with-changes.ts';
 
 interface Expected {
@@ -31,28 +23,23 @@ interface Expected {
   readonly points: readonly { readonly row: number; readonly line?: number; readonly values: Partial<ImportValues> }[];
 }
 
-const ENCODING_NAMES: Readonly<Record<string, { encoding: string; bom: boolean }>> = {
-  'UTF-8 without BOM': { encoding: 'utf-8', bom: false },
-  'UTF-8 with BOM': { encoding: 'utf-8', bom: true },
-  'Windows-1252': { encoding: 'windows-1252', bom: false },
+const ENCODING_NAMES: Readonly<Record<string, string>> = {
+  'UTF-8 without BOM': 'utf-8',
+  'UTF-8 with BOM': 'utf-8',
+  'Windows-1252': 'windows-1252',
 };
 
 const LISTS = ['brackwater-points', 'brackwater-points-semicolon-1252', 'brackwater-faults', 'designations'] as const;
 
-/** Reads and interprets a list with the settings that the product suggests. */
-function importOf(name: string, design: Design): { reading: CsvFileReading; plan: ImportPlan } {
-  const reading = readCsvFile(tagListBytes(`${name}.csv`), {}, design);
-  return { reading, plan: interpretGrid(reading.grid, reading.settings, design) };
-}
-
-describe.each(LISTS)('import of %s.csv', (name) => {
+describe.each(LISTS)('import of %s.csv', async (name) => {
   const expected = tagListExpectation<Expected>(name);
   const design = brackwaterSetup();
-  const { reading, plan } = importOf(name, design);
+  const { reading, plan } = await importOf(tagListBytes(`${name}.csv`), design);
   const kept = plan.rows.filter(({ action }) => action !== 'hold' && action !== 'skip');
 
   it('detects encoding, delimiter, heading row and decimal sign', () => {
-    expect({ encoding: reading.encoding, bom: reading.bom }).toEqual(ENCODING_NAMES[expected.encoding]);
+    expect(reading.format).toBe('csv');
+    expect(reading.encoding).toBe(ENCODING_NAMES[expected.encoding]);
     expect(reading.delimiter).toBe(expected.separator);
     expect(reading.settings.headerRow).toBe(expected.headerRow);
     expect(reading.settings.decimal).toBe(expected.decimalSign);
@@ -97,12 +84,12 @@ describe.each(LISTS)('import of %s.csv', (name) => {
 
   it('reads the same with the value mapping that a user would set', () => {
     const settings = { ...reading.settings, ...(expected.valueMapping && { valueMapping: expected.valueMapping }) };
-    expect(interpretGrid(reading.grid, settings, design)).toEqual(plan);
+    expect(interpretFile({ ...reading, settings }, design)).toEqual(plan);
   });
 
-  it('changes nothing when the same file comes again', () => {
+  it('changes nothing when the same file comes again', async () => {
     const after = withChanges(design, changesOf(plan, design, countingIds()));
-    const second = importOf(name, after).plan;
+    const second = (await importOf(tagListBytes(`${name}.csv`), after)).plan;
     expect(second.rows.filter(({ action }) => action !== 'hold').map(({ action }) => action)).toEqual(
       kept.map(() => 'same'),
     );

@@ -18,6 +18,8 @@ export interface Scope {
   readonly tx: Tx;
   readonly orgId: string;
   readonly projectId: string;
+  /** Told how many rows have just been written, to their table or to the history. */
+  readonly written?: ((rows: number) => void) | undefined;
 }
 
 /** The rows that a change set has made or altered, by collection. */

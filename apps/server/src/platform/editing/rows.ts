@@ -1,7 +1,7 @@
 import type { TObject } from 'typebox';
 import { and, asc, eq, getTableColumns, gt, inArray, type SQL, sql } from 'drizzle-orm';
 import type { PgColumn, PgTable } from 'drizzle-orm/pg-core';
-import { type Tx, uuidArray } from '../database.ts';
+import { uuidArray } from '../database.ts';
 import type { Collection, Row, Scope } from './collection.ts';
 
 /** Rows a statement: more would make one parameter too large to be good. */
@@ -57,14 +57,16 @@ export async function lockRows(scope: Scope, collection: Collection, ids: readon
 
 export async function insertRows(scope: Scope, { table, resource }: Collection, rows: readonly Row[]): Promise<void> {
   const fixed = { org_id: scope.orgId, project_id: scope.projectId };
-  await insertRecords(scope.tx, table, rows.map((row) => ({ ...inColumns(columnsOf(table, resource.Row), row), ...fixed })));
+  const columns = columnsOf(table, resource.Row);
+  await insertRecords(scope, table, rows.map((row) => ({ ...inColumns(columns, row), ...fixed })));
 }
 
 /** Inserts records whose keys are the table's column names; all records have the same keys. */
-export async function insertRecords(tx: Tx, table: PgTable, records: readonly Readonly<Record<string, unknown>>[]): Promise<void> {
+export async function insertRecords({ tx, written }: Pick<Scope, 'tx' | 'written'>, table: PgTable, records: readonly Readonly<Record<string, unknown>>[]): Promise<void> {
   const names = sql.join(Object.keys(records[0] ?? {}).map((name) => sql.identifier(name)), sql`, `);
   for (const batch of batches(records)) {
     await tx.execute(sql`insert into ${table} (${names}) select ${names} from json_populate_recordset(null::${table}, ${JSON.stringify(batch)}::text::json)`);
+    written?.(batch.length);
   }
 }
 
@@ -79,6 +81,7 @@ export async function updateRows(scope: Scope, collection: Collection, rows: rea
       update ${table} set ${sql.join(assignments, sql`, `)}
       from json_populate_recordset(null::${table}, ${JSON.stringify(batch)}::text::json) r
       where ${table.id} = r.id and ${inScope(collection, scope)}`);
+    scope.written?.(batch.length);
   }
 }
 
