@@ -1,9 +1,10 @@
-import { ChangeNotice, DesignDocument, HistoryEntry, NewChangeSet, NewProject, projects as projectResource, ProjectSummary } from '#contract';
+import { ChangeNotice, DesignDocument, HistoryEntry, NewChangeSet, NewProject, NewUndo, projects as projectResource, ProjectSummary } from '#contract';
 import { Type } from 'typebox';
 import { withOrg } from '../platform/context.ts';
-import { created, etag, JsonText, notModified, ok } from '../platform/http/answer.ts';
+import { created, etag, notModified, ok } from '../platform/http/answer.ts';
 import { route, type Route } from '../platform/http/route.ts';
 import { applyChangeSet } from './change-sets/apply-change-set.ts';
+import { undoChangeSet } from './change-sets/undo/undo-change-set.ts';
 import { projectCollection } from './collections.ts';
 import { readDesign } from './design-service.ts';
 import { findChangesSince, findHistory } from './history-queries.ts';
@@ -44,9 +45,9 @@ export const projectRoutes: readonly Route[] = [
   route({
     method: 'get', path: '/projects/:projectId/design', permission: 'project:read', summary: 'The whole design at one instant',
     answers: { 200: DesignDocument, 304: null },
-    handle: async ({ context, params, req }) => {
-      const design = await readDesign(context, params.projectId, req.header('if-none-match'));
-      return design.text === null ? notModified({ ETag: design.etag }) : ok(new JsonText(design.text), { ETag: design.etag });
+    handle: async ({ context, params, req, services }) => {
+      const design = await readDesign(context, services.cache, params.projectId, req.header('if-none-match'));
+      return design.body === null ? notModified({ ETag: design.etag }) : ok(design.body, { ETag: design.etag });
     },
   }),
   route({
@@ -58,6 +59,11 @@ export const projectRoutes: readonly Route[] = [
     method: 'post', path: '/projects/:projectId/change-sets', permission: 'design:write', summary: 'Changes several rows: all or none',
     body: NewChangeSet, bodyLimit: '64mb', answers: { 200: ChangeNotice },
     handle: async ({ context, params, body }) => ok(await applyChangeSet(context, params.projectId, body)),
+  }),
+  route({
+    method: 'post', path: '/projects/:projectId/change-sets/:changeSetId/undo', permission: 'design:write',
+    summary: 'Takes a change set back; the undo of an undo makes it again', body: NewUndo, answers: { 200: ChangeNotice },
+    handle: async ({ context, params, body }) => ok(await undoChangeSet(context, params.projectId, params.changeSetId, body.id)),
   }),
   route({
     method: 'get', path: '/projects/:projectId/history', permission: 'project:read', summary: 'Who changed what, latest first',

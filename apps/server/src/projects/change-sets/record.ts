@@ -8,23 +8,29 @@ import { insertRecords } from '../../platform/editing/rows.ts';
 import { NotFound } from '../../platform/problems.ts';
 import type { ChangedRow } from './outcome.ts';
 
+/** What a set is called in the history. */
+export interface SetName extends Pick<NewChangeSet, 'id' | 'summary'> {
+  /** The set that this one takes back. */
+  readonly undoes?: string;
+}
+
 /**
  * Writes the history of a set and takes the sequence number at the very end: it locks the project, so numbers become
  * visible in the order in which they are given.
  *
  * @returns the new number, or the current one where nothing changed
  */
-export async function recordChangeSet(scope: Scope, personId: string, set: Pick<NewChangeSet, 'id' | 'summary'>, items: readonly ChangedRow[]): Promise<number> {
+export async function recordChangeSet(scope: Scope, personId: string, set: SetName, items: readonly ChangedRow[]): Promise<number> {
   const { tx, orgId, projectId } = scope;
   if (items.length === 0) return currentSequence(scope);
   await tx.execute(sql`set constraints change_items_set_fk deferred`);
-  await insertRecords(tx, changeItems, items.map(({ collection, rowId, before, after }) => ({
+  await insertRecords(scope, changeItems, items.map(({ collection, rowId, before, after }) => ({
     id: newId(), org_id: orgId, project_id: projectId, change_set_id: set.id, collection, row_id: rowId, before, after,
   })));
   const [taken] = await tx.update(projects).set({ sequence: sql`${projects.sequence} + 1` }).where(eq(projects.id, projectId))
     .returning({ sequence: projects.sequence });
   if (!taken) throw new NotFound('project');
-  await tx.insert(changeSets).values({ id: set.id, orgId, projectId, sequence: taken.sequence, personId, summary: set.summary });
+  await tx.insert(changeSets).values({ id: set.id, orgId, projectId, sequence: taken.sequence, personId, summary: set.summary, undoes: set.undoes });
   await announceChange(tx, projectId, taken.sequence);
   return taken.sequence;
 }
