@@ -1,16 +1,9 @@
 import { HttpClient } from '@angular/common/http';
 import { inject, Injectable } from '@angular/core';
-import type {
-  ChangeNotice, DesignDocument, EditableCollection, HistoryEntry, NewChangeSet, NewProject, ProjectRow, ProjectSummary,
-} from '#contract';
+import type { ChangeNotice, DesignDocument, HistoryEntry, NewChangeSet, NewProject, ProjectRow, ProjectSummary } from '#contract';
 import type { Observable } from 'rxjs';
 
 export type AnyRow = { readonly id: string; readonly version: number } & Record<string, unknown>;
-
-const paths: Readonly<Record<EditableCollection, string>> = {
-  points: 'points', dispensers: 'dispensers', cabinets: 'cabinets', controllers: 'controllers', modules: 'modules',
-  moduleGroups: 'module-groups', supplies: 'supplies', circuits: 'circuits', cableNodes: 'cable-nodes', assignments: 'assignments',
-};
 
 @Injectable({ providedIn: 'root' })
 export class ProjectApi {
@@ -33,16 +26,16 @@ export class ProjectApi {
   }
 
   /** Latest first; `before` is the sequence number of the last entry seen. */
-  history(projectId: string, before?: number): Observable<readonly HistoryEntry[]> {
-    return this.http.get<readonly HistoryEntry[]>(`/api/v1/projects/${projectId}/history`, { params: before === undefined ? {} : { before } });
-  }
-
-  patch(projectId: string, collection: EditableCollection | 'projects', id: string, version: number, values: object): Observable<AnyRow> {
-    const url = collection === 'projects' ? `/api/v1/projects/${projectId}` : `/api/v1/projects/${projectId}/${paths[collection]}/${id}`;
-    return this.http.patch<AnyRow>(url, values, { headers: { 'If-Match': `"${version}"` } });
+  history(projectId: string, page: { readonly limit: number; readonly before?: number }): Observable<readonly HistoryEntry[]> {
+    return this.http.get<readonly HistoryEntry[]>(`/api/v1/projects/${projectId}/history`, { params: { ...page } });
   }
 
   apply(projectId: string, changes: NewChangeSet): Observable<ChangeNotice> {
     return this.http.post<ChangeNotice>(`/api/v1/projects/${projectId}/change-sets`, changes);
+  }
+
+  /** Takes a change set back by a new one with this identifier. */
+  undo(projectId: string, setId: string, id: string): Observable<ChangeNotice> {
+    return this.http.post<ChangeNotice>(`/api/v1/projects/${projectId}/change-sets/${setId}/undo`, { id });
   }
 }

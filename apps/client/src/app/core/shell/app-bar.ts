@@ -8,11 +8,12 @@ import { SaveStateLine } from '../../shared/states/save-state';
 import { ProjectStore } from '../project/project-store';
 import { AccountMenu } from './account-menu';
 import { ProjectSwitcher } from './project-switcher';
+import { UndoButtons } from './undo-buttons';
 
-/** The header: brand, project, revision, findings, find, whether the work is saved, and who is signed in. */
+/** The header: brand, project, revision, findings, find, undo and redo, whether the work is saved, and who is signed in. */
 @Component({
   selector: 'lw-app-bar',
-  imports: [AccountMenu, BrandMark, FindingCounts, Icon, MatIconButton, ProjectSwitcher, RouterLink, SaveStateLine],
+  imports: [AccountMenu, BrandMark, FindingCounts, Icon, MatIconButton, ProjectSwitcher, RouterLink, SaveStateLine, UndoButtons],
   changeDetection: ChangeDetectionStrategy.OnPush,
   styleUrl: './app-bar.css',
   templateUrl: './app-bar.html',

@@ -1,10 +1,4 @@
-import { fieldName, fieldValue } from './field-words';
-
-describe('fieldName', () => {
-  it.each([['crossSectionMm2', 'Cross section'], ['doseUl', 'Dose'], ['cableLengthM', 'Cable length'], ['hoursPerDay', 'Hours per day'], ['typeId', 'Type'], ['setV', 'Set'], ['tag', 'Tag']])('%s is read "%s"', (field, words) => {
-    expect(fieldName(field)).toBe(words);
-  });
-});
+import { fieldValue } from './field-words';
 
 describe('fieldValue', () => {
   it('adds the unit that the name carries', () => {
