@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, input, output, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, output, signal } from '@angular/core';
 import { MatButton } from '@angular/material/button';
 import { Icon } from '../../shared/icon/icon';
 
@@ -9,15 +9,19 @@ import { Icon } from '../../shared/icon/icon';
   changeDetection: ChangeDetectionStrategy.OnPush,
   host: { '(dragover)': 'over($event)', '(dragleave)': 'dragging.set(false)', '(drop)': 'drop($event)', '[class.dragging]': 'dragging()' },
   template: `
-    <lw-icon name="upload" />
-    <p><b>Drop a tag list here</b>, a CSV file with one lubrication point a row.</p>
-    <p class="quiet">Commas, semicolons or tabs; any heading row; up to 10 MB and 50,000 rows. You see what it would do before anything is changed.</p>
-    <button matButton="filled" type="button" [disabled]="busy()" (click)="field.click()">Choose a file</button>
-    <input #field type="file" accept=".csv,.txt,.tsv,text/csv,text/plain" hidden (change)="pick(field)" aria-label="Tag list" />`,
+    <lw-icon name="upload" [size]="28" />
+    <p><b>Drop a tag list here</b>, a workbook or a CSV file.</p>
+    <button matButton="filled" type="button" (click)="field.click()">Choose a file</button>
+    <ul class="quiet">
+      <li><b>.xlsx</b> with one sheet or several, or <b>.csv</b>, <b>.tsv</b>, <b>.txt</b> with commas, semicolons or tabs</li>
+      <li>One lubrication point a row, or one signal a row; the headings may stand in any row</li>
+      <li>Up to 25 MB and 100,000 rows</li>
+    </ul>
+    <p class="quiet">You see row by row what it would do. Nothing is changed before you press Import.</p>
+    <input #field type="file" accept=".xlsx,.csv,.txt,.tsv" hidden (change)="pick(field)" aria-label="Tag list" />`,
   styleUrl: './file-drop.css',
 })
 export class FileDrop {
-  readonly busy = input(false);
   readonly picked = output<File>();
   protected readonly dragging = signal(false);
 
@@ -30,7 +34,7 @@ export class FileDrop {
     event.preventDefault();
     this.dragging.set(false);
     const file = event.dataTransfer?.files[0];
-    if (file && !this.busy()) this.picked.emit(file);
+    if (file) this.picked.emit(file);
   }
 
   protected pick(field: HTMLInputElement): void {
