@@ -1,7 +1,6 @@
-import {
-  type Assessment, type Assignment, type Controller, type Design, directAddress, type Dispenser, type Finding, groupKey,
-  type LoadFigures, type Module, type ModuleType, type Point, type Purpose,
-} from '#calc';
+import { type Assessment, directAddress, type Finding, groupKey, type LoadFigures, type Module, type ModuleType, type Purpose } from '#calc';
+import type { LaneView } from '../shared/lane/lane-view';
+import { type Board, channelKey, type Occupant, type RackModule } from './board';
 
 /** A channel with what is on it, or what is proposed for it. */
 export interface ChannelRow {
@@ -15,11 +14,8 @@ export interface ChannelRow {
   /** Address of the dispenser's other signal. */
   readonly otherAddress: string | null;
   readonly loadA: number | null;
-}
-
-export interface Occupant {
-  readonly dispenser: Dispenser;
-  readonly point: Point;
+  /** The drawing of what is on it. */
+  readonly lane: LaneView | null;
 }
 
 /** A group of a module with its feed, its worst load, what the checks found on it, and its channels. */
@@ -39,7 +35,7 @@ export interface GroupSection {
   readonly channels: readonly ChannelRow[];
 }
 
-/** A channel that auto-assignment would give to a dispenser. */
+/** A channel that auto-assignment, a filling or a drop would give to a dispenser. */
 export interface Proposal {
   readonly dispenserId: string;
   readonly moduleId: string;
@@ -47,95 +43,113 @@ export interface Proposal {
   readonly purpose: Purpose;
 }
 
-export interface CabinetModules {
-  readonly cabinet: Design['cabinets'][number];
-  readonly modules: readonly { readonly module: Module; readonly type: ModuleType; readonly controller: Controller }[];
-}
+export type Shown = 'output' | 'input' | 'both';
 
-export const channelKey = (moduleId: string, channel: number): string => `${moduleId}:${channel}`;
-
-/** Cabinets in order of their location, each with its modules from the left. */
-export function modulesByCabinet(design: Design): readonly CabinetModules[] {
-  const types = new Map(design.moduleTypes.map((t) => [t.id, t]));
-  return [...design.cabinets].sort((a, b) => a.location.localeCompare(b.location)).map((cabinet) => ({
-    cabinet,
-    modules: design.controllers.filter((c) => c.cabinetId === cabinet.id).sort((a, b) => a.name.localeCompare(b.name))
-      .flatMap((controller) => design.modules.filter((m) => m.controllerId === controller.id).sort((a, b) => a.slot - b.slot)
-        .flatMap((module) => {
-          const type = types.get(module.typeId);
-          return type ? [{ module, type, controller }] : [];
-        })),
-  }));
-}
-
-/** The channel table: the groups of every module shown, in order of cabinet, controller and place on the rack. */
-export function mappingSections(
-  design: Design, assessment: Assessment, shown: 'output' | 'input' | 'both', proposals: readonly Proposal[],
-): readonly GroupSection[] {
-  const context = contextOf(design, assessment, proposals);
-  return modulesByCabinet(design).flatMap(({ modules }) => modules)
-    .filter(({ type }) => shown === 'both' || type.kind === shown)
-    .flatMap(({ module, type, controller }) => groupsOf(type).map((groupIndex) => groupSection(context, module, type, groupIndex, controller.name)));
-}
-
-interface Context {
-  readonly design: Design;
+export interface SectionSource {
+  readonly board: Board;
   readonly assessment: Assessment;
-  readonly taken: ReadonlyMap<string, Assignment>;
-  readonly proposed: ReadonlyMap<string, Proposal>;
-  readonly occupants: ReadonlyMap<string, Occupant>;
-  readonly circuits: ReadonlyMap<string, string>;
+  readonly lanes: ReadonlyMap<string, LaneView>;
+  readonly shown: Shown;
+  readonly proposals: readonly Proposal[];
 }
 
-function contextOf(design: Design, assessment: Assessment, proposals: readonly Proposal[]): Context {
-  const points = new Map(design.points.map((p) => [p.id, p]));
-  const occupants = new Map<string, Occupant>();
-  for (const dispenser of design.dispensers) {
-    const point = points.get(dispenser.pointId);
-    if (point) occupants.set(dispenser.id, { dispenser, point });
-  }
-  return {
-    design, assessment, occupants,
-    taken: new Map(design.assignments.map((a) => [channelKey(a.moduleId, a.channel), a])),
-    proposed: new Map(proposals.map((p) => [channelKey(p.moduleId, p.channel), p])),
-    circuits: new Map(design.circuits.map((c) => [c.id, c.name])),
+/**
+ * The channel table: the groups of every module shown, in order of cabinet, controller and place on the rack. What reads
+ * the same as before is the same object as before, so that only what changed is drawn again.
+ */
+export function mappingSections(source: SectionSource, before: readonly GroupSection[] = []): readonly GroupSection[] {
+  const context: Context = {
+    ...source, findings: bySubject(source.assessment.findings), before: new Map(before.map((s) => [s.key, s])),
+    proposed: new Map(source.proposals.map((p) => [channelKey(p.moduleId, p.channel), p])),
   };
+  return source.board.modules
+    .filter(({ type }) => source.shown === 'both' || type.kind === source.shown)
+    .flatMap((rack) => groupsOf(rack.type).map((groupIndex) => groupSection(context, rack, groupIndex)));
 }
 
-const groupsOf = (type: ModuleType): readonly number[] =>
+interface Context extends SectionSource {
+  readonly findings: ReadonlyMap<string, readonly Finding[]>;
+  readonly proposed: ReadonlyMap<string, Proposal>;
+  readonly before: ReadonlyMap<string, GroupSection>;
+}
+
+export const groupsOf = (type: ModuleType): readonly number[] =>
   Array.from({ length: Math.ceil(type.channels / type.channelsPerGroup) }, (_, i) => i);
 
-function groupSection(context: Context, module: Module, type: ModuleType, groupIndex: number, controller: string): GroupSection {
+function groupSection(context: Context, { module, type, controller }: RackModule, groupIndex: number): GroupSection {
   const from = groupIndex * type.channelsPerGroup;
   const to = Math.min(from + type.channelsPerGroup, type.channels) - 1;
-  const channels = Array.from({ length: to - from + 1 }, (_, i) => channelRow(context, module, type, from + i));
   const key = groupKey(module.id, groupIndex);
-  const feed = context.design.moduleGroups.find((g) => g.moduleId === module.id && g.groupIndex === groupIndex)?.circuitId;
-  return {
-    key, controller, module, type, groupIndex, channels,
-    first: directAddress(type.kind, module.baseByte, from), last: directAddress(type.kind, module.baseByte, to),
-    circuit: (feed && context.circuits.get(feed)) ?? null,
-    load: context.assessment.groups.get(key) ?? null,
+  const old = context.before.get(key);
+  // The same module of the same type has the same keys and addresses: they need not be written again.
+  const rows = old?.module === module && old.type === type ? old.channels : [];
+  const channels = Array.from({ length: to - from + 1 }, (_, i) => channelRow(context, module, type, from + i, rows[i]));
+  const feed = context.board.feeds.get(key);
+  const findings = [...(context.findings.get(key) ?? []), ...((groupIndex === 0 && context.findings.get(module.id)) || [])];
+  return kept({
+    key, controller: controller.name, module, type, groupIndex,
+    channels: sameList(channels, old?.channels) ? old.channels : channels,
+    first: channels[0].address, last: channels[channels.length - 1].address,
+    circuit: (feed && context.board.circuits.get(feed)) ?? null,
+    load: keptLoad(context.assessment.groups.get(key) ?? null, old?.load),
     free: channels.filter((c) => !c.occupant || c.proposed).length,
-    findings: context.assessment.findings
-      .filter((f) => f.severity !== 'note' && (f.subject.id === key || (groupIndex === 0 && f.subject.id === module.id))),
-  };
+    findings: keptFindings(findings, old?.findings),
+  }, old);
 }
 
-function channelRow(context: Context, module: Module, type: ModuleType, channel: number): ChannelRow {
-  const key = channelKey(module.id, channel);
-  const taken = context.taken.get(key);
+function channelRow(context: Context, module: Module, type: ModuleType, channel: number, old: ChannelRow | undefined): ChannelRow {
+  const { board, assessment } = context;
+  const key = old?.key ?? channelKey(module.id, channel);
+  const taken = board.taken.get(key);
   const proposal = taken ? undefined : context.proposed.get(key);
   const dispenserId = taken?.dispenserId ?? proposal?.dispenserId;
-  const lane = dispenserId === undefined ? undefined : context.assessment.lanes.get(dispenserId);
+  if (dispenserId === undefined && old && !old.occupant) return old;
+  const figures = dispenserId === undefined ? undefined : assessment.lanes.get(dispenserId);
   const isOutput = type.kind === 'output';
-  return {
+  return kept({
     key, module, channel,
     purpose: isOutput ? 'control' : 'status',
-    address: directAddress(type.kind, module.baseByte, channel),
-    occupant: (dispenserId !== undefined && context.occupants.get(dispenserId)) || null,
+    address: old?.address ?? directAddress(type.kind, module.baseByte, channel),
+    occupant: (dispenserId !== undefined && board.occupants.get(dispenserId)) || null,
     proposed: proposal !== undefined,
-    otherAddress: (isOutput ? lane?.statusAddress : lane?.outputAddress) ?? null,
-    loadA: isOutput ? (lane?.channelA ?? null) : type.inputA,
-  };
+    otherAddress: (isOutput ? figures?.statusAddress : figures?.outputAddress) ?? null,
+    loadA: isOutput ? (figures?.channelA ?? null) : type.inputA,
+    lane: (dispenserId !== undefined && context.lanes.get(dispenserId)) || null,
+  }, old);
+}
+
+/** What concerns a place, notes aside, by the place's id. */
+function bySubject(findings: readonly Finding[]): ReadonlyMap<string, readonly Finding[]> {
+  const found = new Map<string, Finding[]>();
+  for (const finding of findings) {
+    if (finding.severity === 'note' || finding.subject.kind === 'dispenser' || finding.subject.kind === 'point') continue;
+    const own = found.get(finding.subject.id);
+    if (own) own.push(finding);
+    else found.set(finding.subject.id, [finding]);
+  }
+  return found;
+}
+
+/** The old object where every field is the same. */
+export function kept<T extends object>(made: T, old: T | undefined): T {
+  if (!old) return made;
+  for (const field in made) if (made[field] !== old[field]) return made;
+  return old;
+}
+
+function sameList<T>(made: readonly T[], old: readonly T[] | undefined): old is readonly T[] {
+  return old !== undefined && made.length === old.length && made.every((item, i) => item === old[i]);
+}
+
+function keptLoad(made: LoadFigures | null, old: LoadFigures | null | undefined): LoadFigures | null {
+  if (!made || !old) return made;
+  return made.worstA === old.worstA && made.allOnA === old.allOnA && made.ratingA === old.ratingA && made.used === old.used ? old : made;
+}
+
+function keptFindings(made: readonly Finding[], old: readonly Finding[] | undefined): readonly Finding[] {
+  const same = old?.length === made.length && made.every((f, i) => {
+    const o = old[i];
+    return f === o || (f.key === o.key && f.severity === o.severity && f.title === o.title && f.detail === o.detail && f.remedy === o.remedy);
+  });
+  return same ? old : made;
 }

@@ -2,8 +2,8 @@ import type { ElementRef } from '@angular/core';
 import { afterNextRender, ChangeDetectionStrategy, Component, computed, input, output, signal, viewChild } from '@angular/core';
 import { MatAutocomplete, MatAutocompleteTrigger, MatOption } from '@angular/material/autocomplete';
 import { formatMetres } from '#calc';
-import type { OpenLane } from '../mapping-view-store';
 import type { ChannelRow } from '../mapping-rows';
+import { lacking, type OpenLane } from '../open-lanes';
 
 /** Type-ahead in a free channel: part of a tag or description, Enter assigns, Escape leaves. */
 @Component({
@@ -27,7 +27,7 @@ export class ChannelFinder {
   protected readonly options = computed(() => {
     const words = this.text().toLowerCase().split(/\s+/).filter(Boolean);
     return this.lanes()
-      .filter((lane) => lane.missing.includes(this.row().purpose))
+      .filter((lane) => lacking(lane, this.row().purpose))
       .filter((lane) => words.every((w) => `${lane.point.tag} ${lane.point.description ?? ''} ${lane.point.machine ?? ''}`.toLowerCase().includes(w)))
       .slice(0, 50);
   });

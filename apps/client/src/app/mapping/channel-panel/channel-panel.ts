@@ -1,7 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import { ampsAgainstMaximum, type Assessment, type Design, voltsAgainstMinimum } from '#calc';
+import type { CabinetModules } from '../board';
 import type { ChannelRow } from '../mapping-rows';
-import { modulesByCabinet } from '../mapping-rows';
 
 /** What the channel under the keyboard carries, and how many channels of its kind the cabinet keeps free. */
 @Component({
@@ -12,6 +12,7 @@ import { modulesByCabinet } from '../mapping-rows';
 })
 export class ChannelPanel {
   readonly row = input.required<ChannelRow | null>();
+  readonly cabinets = input.required<readonly CabinetModules[]>();
   readonly design = input.required<Design>();
   readonly assessment = input.required<Assessment>();
   readonly editable = input.required<boolean>();
@@ -31,7 +32,7 @@ export class ChannelPanel {
   protected readonly spare = computed(() => {
     const row = this.row();
     const type = this.type();
-    const cabinet = modulesByCabinet(this.design()).find((c) => c.modules.some((m) => m.module.id === row?.module.id));
+    const cabinet = this.cabinets().find((c) => c.modules.some((m) => m.module.id === row?.module.id));
     if (!cabinet || !type) return null;
     const modules = cabinet.modules.filter((m) => m.type.kind === type.kind);
     const channels = modules.reduce((sum, m) => sum + m.type.channels, 0);

@@ -1,9 +1,11 @@
-import { ChangeDetectionStrategy, Component, computed, input, output } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, input, linkedSignal, output } from '@angular/core';
 import type { Assignment, Finding } from '#calc';
 import { FindingMark } from '../../shared/findings/finding-mark';
-import { channelKey, type CabinetModules } from '../mapping-rows';
+import type { CabinetModules } from '../board';
+import { kept } from '../mapping-rows';
+import { type ModuleMark, moduleMarks } from './module-marks';
 
-/** Every channel of the plant, one cell each: dotted free, hollow mapped. Pick a module to go there. */
+/** Every channel of the plant, one cell each: dotted free, hollow mapped. Pick a module to go there, or drop on it to fill it. */
 @Component({
   selector: 'lw-channel-strip',
   imports: [FindingMark],
@@ -15,28 +17,16 @@ export class ChannelStrip {
   readonly cabinets = input.required<readonly CabinetModules[]>();
   readonly assignments = input.required<readonly Assignment[]>();
   readonly findings = input.required<readonly Finding[]>();
+  /** Key of what a drag is over. */
+  readonly aimed = input<string | null>(null);
   readonly picked = output<string>();
 
-  protected readonly view = computed(() => {
-    const taken = new Set(this.assignments().map((a) => channelKey(a.moduleId, a.channel)));
-    return this.cabinets().map(({ cabinet, modules }) => ({
-      cabinet,
-      modules: modules.map(({ module, type }) => {
-        const cells = Array.from({ length: type.channels }, (_, c) => ({
-          x: c * 9 + Math.floor(c / type.channelsPerGroup) * 4, taken: taken.has(channelKey(module.id, c)),
-        }));
-        return {
-          module, cells, width: (cells.at(-1)?.x ?? 0) + 7,
-          used: cells.filter((cell) => cell.taken).length,
-          note: type.kind === 'input' ? 'in' : type.technology === 'relay' ? 'relay' : 'out',
-          severity: this.worst(module.id),
-        };
-      }),
-    }));
+  /** By module id; what reads as before is the same object. */
+  private readonly marks = linkedSignal<ReadonlyMap<string, ModuleMark>, ReadonlyMap<string, ModuleMark>>({
+    source: () => moduleMarks(this.cabinets().flatMap((c) => c.modules), this.assignments(), this.findings()),
+    computation: (made, before) => new Map([...made].map(([id, mark]) => [id, kept(mark, before?.value.get(id))])),
   });
-
-  private worst(moduleId: string): 'error' | 'warning' | null {
-    const own = this.findings().filter((f) => f.subject.id === moduleId || f.subject.id.startsWith(`${moduleId}/`));
-    return own.some((f) => f.severity === 'error') ? 'error' : own.some((f) => f.severity === 'warning') ? 'warning' : null;
-  }
+  protected readonly view = computed(() => this.cabinets().map(({ cabinet, modules }) => ({
+    cabinet, modules: modules.flatMap(({ module }) => this.marks().get(module.id) ?? []),
+  })));
 }
