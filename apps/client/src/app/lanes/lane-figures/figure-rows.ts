@@ -2,7 +2,7 @@ import {
   ampsAgainstMaximum, type Assessment, type Design, demandFigure, DEMAND_UNITS, formatCount, formatDays, formatHours, formatInterval,
   formatNumber, formatPercent, formatVolts, formatVolume, type LaneFigureName, NOTHING, voltsAgainstMinimum, withUnit,
 } from '#calc';
-import type { LaneRows } from '../loop-view-of';
+import type { LaneRows } from '../lane-rows';
 
 /** One line of the lane's figures; `name` where the figure explains itself. */
 export interface FigureRow {

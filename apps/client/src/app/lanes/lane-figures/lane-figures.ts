@@ -14,7 +14,12 @@ import type { FigureRow } from './figure-rows';
     div.open { background: var(--lw-selected); }
     dt { color: var(--mat-sys-on-surface-variant); }
     dd { margin: 0; text-align: right; font-weight: 500; }
-    .limit { grid-column: 1 / -1; font: var(--mat-sys-label-small); font-weight: 400; color: var(--mat-sys-on-surface-variant); text-align: right; }`,
+    .limit { grid-column: 1 / -1; font: var(--mat-sys-label-small); font-weight: 400; color: var(--mat-sys-on-surface-variant); text-align: right; }
+    @media print {
+      div { grid-template-columns: minmax(0, 1fr) auto auto; min-height: 0; padding: 1px 10px; }
+      dd { font-weight: 600; }
+      .limit { grid-column: auto; }
+    }`,
   template: `
     <dl>
       @for (row of rows(); track row.label) {

@@ -9,17 +9,23 @@ import { ExplainPanel } from '../../shared/explain/explain-panel';
 import { FindingItem } from '../../shared/findings/finding-item';
 import { type Mend, mendOf } from '../../shared/findings/finding-mend';
 import { Icon } from '../../shared/icon/icon';
+import { LaneLine } from '../../shared/lane/lane-line';
+import { laneViewsOf } from '../../shared/lane/lane-views';
 import { LoopDiagram } from '../../shared/lane/loop-diagram';
+import { StateGlyph } from '../../shared/lane/state-glyph';
 import { EmptyState } from '../../shared/states/empty-state';
 import { ErrorState } from '../../shared/states/error-state';
 import { LoadingRows } from '../../shared/states/loading-rows';
 import { electricRows, planRows } from '../lane-figures/figure-rows';
 import { LaneFigures } from '../lane-figures/lane-figures';
-import { laneRowsOf, loopViewOf, protectionText } from '../loop-view-of';
+import { neighboursOf } from '../lane-neighbours';
+import { LaneNeighboursTable } from '../lane-neighbours-table/lane-neighbours-table';
+import { laneRowsOf, protectionText } from '../lane-rows';
+import { loopViewOf } from '../loop-view-of';
 
 @Component({
   selector: 'lw-lane-page',
-  imports: [Caution, EmptyState, ErrorState, ExplainPanel, FindingItem, Icon, LaneFigures, LoadingRows, LoopDiagram, MatButton, MatIconButton, RouterLink],
+  imports: [Caution, EmptyState, ErrorState, ExplainPanel, FindingItem, Icon, LaneFigures, LaneLine, LaneNeighboursTable, LoadingRows, LoopDiagram, MatButton, MatIconButton, RouterLink, StateGlyph],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './lane-page.html',
   styleUrl: './lane-page.css',
@@ -86,8 +92,18 @@ export class LanePage {
     { act: 'Only a SELV or PELV supply of 24 V.', why: 'Nothing else may feed a dispenser.' },
     { act: 'Keep clear of moving machinery.', why: 'Test-run with guards in place.' },
   ];
+  /** The lanes of the same box. */
+  protected readonly beside = computed(() => {
+    const ready = this.ready();
+    const rows = this.rows();
+    return ready && rows ? neighboursOf(ready.design, ready.assessment, rows) : null;
+  });
+  protected readonly line = computed(() => {
+    const ready = this.ready();
+    return ready ? (laneViewsOf(ready.design, ready.assessment).get(this.dispenserId()) ?? null) : null;
+  });
   /** The lane before and after, by tag. */
-  protected readonly neighbours = computed(() => {
+  protected readonly around = computed(() => {
     const design = this.ready()?.design;
     if (!design) return { before: null, after: null };
     const tags = new Map(design.points.map((p) => [p.id, p.tag]));

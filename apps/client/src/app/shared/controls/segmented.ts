@@ -4,8 +4,8 @@ import { MatButtonToggle, MatButtonToggleGroup } from '@angular/material/button-
 export interface Segment<T extends string = string> {
   readonly value: T;
   readonly label: string;
-  /** Stands behind the label, for instance a count. */
-  readonly count?: number;
+  /** Stands behind the label, for instance a count; a large one as words. */
+  readonly count?: number | string;
 }
 
 /** One choice of a few, side by side. */

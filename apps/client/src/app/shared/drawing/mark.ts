@@ -1,6 +1,6 @@
 /** One element of an SVG drawing; pure data, so that a drawing can be computed and tested without a screen. */
 export interface Mark {
-  readonly tag: 'path' | 'circle' | 'rect' | 'text' | 'tspan' | 'g';
+  readonly tag: 'path' | 'circle' | 'rect' | 'text' | 'tspan' | 'g' | 'title';
   readonly attrs: Readonly<Record<string, string>>;
   readonly text?: string;
   readonly children?: readonly Mark[];
@@ -21,6 +21,9 @@ export const rect = (cls: string, x: number, y: number, width: number, height: n
 });
 
 export const group = (cls: string, ...children: readonly Mark[]): Mark => ({ tag: 'g', attrs: { class: cls }, children });
+
+/** What a pointer that rests on the group reads. */
+export const title = (words: string): Mark => ({ tag: 'title', attrs: {}, text: words });
 
 /** A stretch of text in a class of its own, for instance a quiet unit. */
 export interface Words {

@@ -1,9 +1,10 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 import type { Severity } from '#calc';
 import { Drawing } from '../drawing/drawing';
-import { circle, group, type Mark, path } from '../drawing/mark';
-import { run } from './lane-parts';
-import { LANE_STATE_WORDS, LANE_STATES, type LaneState } from './lane-view';
+import { circle, group, type Mark } from '../drawing/mark';
+import { findingMark } from './finding-mark-shapes';
+import { run, seal } from './lane-parts';
+import { ALL_LANE_STATES, LANE_STATE_WORDS, type LaneState } from './lane-view';
 
 /** One dispenser in the row of an area. */
 export interface LaneMark {
@@ -34,7 +35,7 @@ export class LaneMarks {
   protected readonly height = computed(() => (this.many() ? 1 : Math.max(1, Math.ceil(this.lanes().length / this.perRow()))) * ROW + 2);
   protected readonly shapes = computed(() => (this.many() ? stretches(this.lanes(), this.width()) : marks(this.lanes(), this.perRow())));
   protected readonly words = computed(() =>
-    LANE_STATES.map((s) => [count(this.lanes(), s), LANE_STATE_WORDS[s].toLowerCase()] as const).filter(([n]) => n > 0).map((p) => p.join(' ')).join(', '));
+    ALL_LANE_STATES.map((s) => [count(this.lanes(), s), LANE_STATE_WORDS[s].toLowerCase()] as const).filter(([n]) => n > 0).map((p) => p.join(' ')).join(', '));
 }
 
 const count = (lanes: readonly LaneMark[], state: LaneState): number => lanes.filter((l) => l.state === state).length;
@@ -43,25 +44,23 @@ function marks(lanes: readonly LaneMark[], perRow: number): readonly Mark[] {
   return lanes.flatMap((lane, i) => {
     const x = (i % perRow) * (WIDTH + GAP);
     const y = Math.floor(i / perRow) * ROW + 22;
-    return [...stretch(x, x + WIDTH, y, lane.state), ...(lane.severity ? [findingShape(x + WIDTH / 2, y - 14, lane.severity)] : [])];
+    return [...stretch(x, x + WIDTH, y, lane.state), ...(lane.severity ? [findingMark(x + WIDTH / 2, y - 14, lane.severity)] : [])];
   });
 }
 
 function stretches(lanes: readonly LaneMark[], width: number): readonly Mark[] {
   let x = 0;
-  return LANE_STATES.filter((s) => count(lanes, s) > 0).flatMap((state) => {
+  return ALL_LANE_STATES.filter((s) => count(lanes, s) > 0).flatMap((state) => {
     const from = x;
     x += (width * count(lanes, state)) / lanes.length;
     return stretch(from, x - GAP, 22, state);
   });
 }
 
+/** A short mark of a lane: ends while it is mapped, its seal once it is signed or stale. */
 function stretch(x1: number, x2: number, y: number, state: LaneState): readonly Mark[] {
+  const middle = (x1 + x2) / 2;
   const ends = state === 'mapped' ? [group('st-mapped', circle('node', x1 + 2, y, 2), circle('node', x2 - 2, y, 2))] : [];
-  return [run(x1, x2, y, state), ...ends];
+  const seals = state === 'signed' ? [circle('gap', middle, y, 5.5), seal(middle, y, 4, state)] : [];
+  return [run(x1, x2, y, state, { ticks: [middle], k: 0.85 }), ...ends, ...seals];
 }
-
-/** The finding marks in 11 px, with their centre at (x, y). */
-const findingShape = (x: number, y: number, severity: 'error' | 'warning'): Mark => severity === 'error'
-  ? group('small-mark', path('octagon', `M${x - 2.2} ${y - 5.1}h4.4l2.9 2.9v4.4l-2.9 2.9h-4.4l-2.9 -2.9v-4.4z`), path('bang', `M${x} ${y - 3}v3.6M${x} ${y + 2.2}v.8`))
-  : group('small-mark', path('triangle', `M${x} ${y - 4.4}L${x + 4.9} ${y + 4.4}H${x - 4.9}z`), path('stroke', `M${x} ${y - 1.4}v2.8M${x} ${y + 2.4}v.8`));

@@ -9,7 +9,7 @@ export function laneViewsOf(design: Design, assessment: Assessment): ReadonlyMap
   const cabinets = new Map(design.controllers.map((c) => [c.id, places.get(c.cabinetId) ?? null]));
   return new Map(design.dispensers.map((d) => {
     const from = (d.nodeId === null ? null : boxes.get(d.nodeId)) ?? (d.controllerId === null ? null : cabinets.get(d.controllerId)) ?? null;
-    return [d.id, laneViewOf(d, assessment.lanes.get(d.id), tags.get(d.pointId) ?? '', from)];
+    return [d.id, keptView(d, laneViewOf(d, assessment.lanes.get(d.id), tags.get(d.pointId) ?? '', from))];
   }));
 }
 
@@ -26,8 +26,21 @@ export function laneViewOf(dispenser: Dispenser, figures: LaneFigures | undefine
     worstV: figures?.worst?.volts ?? null,
     minV: figures?.minV ?? null,
     intervalMs: figures?.plan?.intervalMs ?? null,
+    method: dispenser.method,
+    planned: Boolean(figures?.plan ?? figures?.timed),
+    collapsed: figures?.collapsed ?? false,
   };
 }
 
 /** A dispenser on its own clock has no output: its status channel is what maps it. */
 const stateOf = (address: string | null): LaneState => (address === null ? 'unmapped' : 'mapped');
+
+const kept = new WeakMap<Dispenser, LaneView>();
+
+/** The view made before where nothing in it moved: an edit elsewhere then draws no row again. */
+function keptView(dispenser: Dispenser, view: LaneView): LaneView {
+  const before = kept.get(dispenser);
+  if (before && (Object.keys(view) as (keyof LaneView)[]).every((key) => before[key] === view[key])) return before;
+  kept.set(dispenser, view);
+  return view;
+}

@@ -1,31 +1,45 @@
-import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
-import { formatNumber } from '#calc';
+import { afterNextRender, ChangeDetectionStrategy, Component, computed, DestroyRef, type ElementRef, inject, input, signal, viewChild } from '@angular/core';
 import { Drawing } from '../drawing/drawing';
-import { PROFILE, WIDTH } from './loop-geometry';
+import { LEAST_WIDTH, layoutOf, WIDTH } from './loop-geometry';
 import { loopShapes } from './loop-shapes';
+import { LoopStations } from './loop-stations';
 import { LoopUpright } from './loop-upright';
 import type { LoopView } from './loop-view';
+import { loopWords } from './loop-words';
 
-/** The whole lane with its voltage profile; upright on a phone. */
+/** The whole lane with its voltage profile; upright where there is no room for it, and its figures as a list. */
 @Component({
   selector: 'lw-loop-diagram',
-  imports: [Drawing, LoopUpright],
+  imports: [Drawing, LoopStations, LoopUpright],
   changeDetection: ChangeDetectionStrategy.OnPush,
-  styles: ':host { display: block; } .wide { overflow-x: auto; } svg { width: 100%; min-width: 1000px; max-width: 1500px; height: auto; }',
+  styleUrl: './loop-diagram.css',
   template: `
-    <div class="wide desk-only">
-      <svg class="lane loop" role="img" [attr.viewBox]="'0 0 ' + width + ' ' + height()" [attr.aria-label]="words()" [lwDrawing]="shapes()"></svg>
+    <div class="wide" #wide>
+      <svg class="lane loop" role="img" [attr.viewBox]="'0 0 ' + width() + ' ' + layout().height" [attr.aria-label]="words()" [lwDrawing]="shapes()"></svg>
     </div>
-    <div class="phone-only"><lw-loop-upright [loop]="loop()" /></div>`,
+    <lw-loop-upright class="narrow" [loop]="loop()" [words]="words()" />
+    <lw-loop-stations class="list" [loop]="loop()" />`,
 })
 export class LoopDiagram {
   readonly loop = input.required<LoopView>();
-  protected readonly width = WIDTH;
-  protected readonly height = computed(() => (this.loop().profile === null ? PROFILE.top : PROFILE.top + PROFILE.height + 4));
-  protected readonly shapes = computed(() => loopShapes(this.loop()));
-  protected readonly words = computed(() => {
-    const loop = this.loop();
-    const end = loop.profile?.stations.at(-1);
-    return `Loop diagram of ${loop.tag}${end ? `; ${formatNumber(end.worstV, 1, 'down')} V at the dispenser with the worst set, ${formatNumber(end.aloneV, 1)} V running alone` : ''}`;
-  });
+  private readonly wide = viewChild.required<ElementRef<HTMLElement>>('wide');
+  /** As wide as its place, so that its words keep their size and the trunk takes the room. */
+  protected readonly width = signal(WIDTH);
+  protected readonly layout = computed(() => layoutOf(this.loop(), this.width()));
+  protected readonly shapes = computed(() => loopShapes(this.loop(), this.width()));
+  protected readonly words = computed(() => loopWords(this.loop()));
+
+  constructor() {
+    const destroyed = inject(DestroyRef);
+    afterNextRender(() => {
+      const observer = new ResizeObserver(([entry]) => this.fit(entry.contentRect.width));
+      observer.observe(this.wide().nativeElement);
+      destroyed.onDestroy(() => observer.disconnect());
+    });
+  }
+
+  /** Hidden it has no width, and keeps the one it had. */
+  private fit(px: number): void {
+    if (px > 0) this.width.set(Math.round(Math.min(1640, Math.max(LEAST_WIDTH, px))));
+  }
 }

@@ -1,83 +1,65 @@
-import { formatAmps, formatDemand, formatMetres, formatNumber, formatSection, formatVolume, THIN_SPACE } from '#calc';
+import { formatMetres, formatSection, THIN_SPACE } from '#calc';
 import { circle, group, type Mark, path, rect, round, text } from '../drawing/mark';
-import { boxCentres, type Conductor, halfBox, X } from './loop-geometry';
-import { run, signaturePlace } from './lane-parts';
-import type { LaneState } from './lane-view';
-import type { LoopView } from './loop-view';
+import { run } from './lane-parts';
+import { moreLanes, nameRoom, stateOf } from './loop-cabinet-shapes';
+import type { Conductor, Layout } from './loop-geometry';
+import type { LoopBox, LoopView } from './loop-view';
 
-/** Cables, junction boxes, dispenser and point. */
-export function fieldShapes(loop: LoopView, conductors: readonly Conductor[]): readonly Mark[] {
-  const centres = boxCentres(loop.boxes.length);
-  const half = halfBox(centres.length);
-  const stops = [X.terminal + 3 - half, ...centres, X.dispenser + half];
+/** Trunk, junction boxes and own cable, from the cabinet's terminals to the dispenser. */
+export function fieldShapes(loop: LoopView, layout: Layout): readonly Mark[] {
+  const { boxes, half, conductors, terminal, dispenser } = layout;
+  const stops = [terminal + 3 - half, ...boxes, dispenser + half];
   return [
-    ...conductors.flatMap((c) => stops.slice(1).map((to, i) => run(i === 0 ? X.terminal + 4 + nameRoom(c) : stops[i] + half, to - half, c.y + 0.5, stateOf(loop, c)))),
-    ...centres.flatMap((x, i) => box(loop, x, half, conductors, loop.boxes[i].location)),
-    ...trunkLabels(loop, centres, half, conductors),
-    ...ownCableLabel(loop, centres, half, conductors),
-    ...dispenser(loop, conductors), ...point(loop),
+    ...conductors.flatMap((c) => stops.slice(1).map((to, i) => run(i === 0 ? terminal + 4 + nameRoom(c) : stops[i] + half, to - half, c.y, stateOf(loop, c), { ticks: i === boxes.length ? undefined : [] }))),
+    ...loop.boxes.flatMap((box, i) => [...junction(loop, layout, i), ...neighbours(box, layout, i)]),
+    ...loop.boxes.flatMap((box, i) => trunkLabel(loop, layout, box, i)),
+    ...ownCableLabel(loop, layout),
   ];
 }
 
-const nameRoom = (c: Conductor): number => c.label.length * 6.4 + 10;
-
-const stateOf = (loop: LoopView, conductor: Conductor): LaneState => (conductor.name === 'status' && loop.status === null ? 'unmapped' : loop.state);
-
-function box(loop: LoopView, x: number, half: number, conductors: readonly Conductor[], location: string): readonly Mark[] {
-  const [top, bottom] = [conductors[0].y - 14, conductors.at(-1)!.y + 15];
-  const pins = conductors.flatMap((c) => [
-    path('seg fine', `M${round(x - half)} ${c.y + 0.5}H${round(x + half)}`), circle('term', x - half, c.y + 0.5, 3.5), circle('term', x + half, c.y + 0.5, 3.5),
-  ]);
-  return [group(`st-${loop.state}`, rect('node', x - half, top, 2 * half, bottom - top), ...pins), text('mono', x, bottom + 15, location, 'middle')];
-}
-
-/** Each trunk's name, length and sections, as much as there is room for. */
-function trunkLabels(loop: LoopView, centres: readonly number[], half: number, conductors: readonly Conductor[]): readonly Mark[] {
-  return loop.boxes.flatMap((b, i) => {
-    const from = i === 0 ? X.trunk - 6 : centres[i - 1] + half;
-    const to = centres[i] - half;
-    const [x, room] = [(from + to) / 2, to - from];
-    const pair = `${b.cableTag} ${formatMetres(b.lengthM)}${room > 105 ? ` 2${THIN_SPACE}×${THIN_SPACE}${formatSection(b.powerMm2)}` : ''}`;
-    const cores = `${room > 105 ? 'cores ' : ''}${formatSection(b.signalMm2)}`;
-    const [power, signal] = loop.wiring === 'four-core' ? [conductors[0], conductors[2]] : [conductors[1], conductors[0]];
-    return [text('cb', x, labelY(power, conductors), pair, 'middle'), ...(room > 60 ? [text('cb', x, labelY(signal, conductors), cores, 'middle')] : [])];
-  });
-}
-
-/** Above the boxes for the topmost conductor, between the conductors for the others. */
-const labelY = (of: Conductor, conductors: readonly Conductor[]): number => of.y - (of === conductors[0] ? 20 : 10);
-
-function ownCableLabel(loop: LoopView, centres: readonly number[], half: number, conductors: readonly Conductor[]): readonly Mark[] {
-  const from = centres.length > 0 ? centres.at(-1)! + half : X.trunk;
-  const size = loop.cable.sectionMm2 === null ? '' : ` ${conductors.length}${THIN_SPACE}×${THIN_SPACE}${formatSection(loop.cable.sectionMm2)}`;
-  return [text('cb', (from + X.dispenser) / 2, labelY(conductors[0], conductors), `${formatMetres(loop.cable.lengthM)}${size}`, 'middle')];
-}
-
-function dispenser(loop: LoopView, conductors: readonly Conductor[]): readonly Mark[] {
-  const [d, x, device] = [X.dispenser, X.dispenser + 68, loop.dispenser];
-  const running = [formatAmps(device.runA), ...(device.runMs === null ? [] : [`for ${formatNumber(device.runMs / 1000, device.runMs % 1000 === 0 ? 0 : 1)}${THIN_SPACE}s`])].join(' ');
+/** A box: a terminal on both sides of each conductor. */
+function junction(loop: LoopView, { boxes, half, conductors }: Layout, i: number): readonly Mark[] {
+  const x = boxes[i];
+  const [top, bottom] = [conductors[0].y - 14, conductors.at(-1)!.y + 14];
+  const through = (c: Conductor): Mark => group(`st-${stateOf(loop, c)}`,
+    path('seg fine', `M${round(x - half)} ${c.y}H${round(x + half)}`), circle('term', x - half, c.y, 3.5), circle('term', x + half, c.y, 3.5));
   return [
-    group(`st-${loop.state}`, rect('node', d, 73, 122, 119, 8)),
-    ...conductors.map((c) => text('mono dim', d + 7, c.y + 4, device.pins[c.name] ?? '')),
-    path(`pulse big`, `M${d + 46} 114h13v-19h19v19h13`),
-    text('fig', x, 136, formatVolume(device.doseUl), 'middle'), text('', x, 157, running, 'middle'),
-    ...(device.idleA === null || device.idleA === 0 ? [] : [text('dim', x, 174, `${formatAmps(device.idleA)} standing`, 'middle')]),
-    group(`st-${loop.state}`, rect('node', d + 131, 73, 28, 119, 2), rect('fill-grease', d + 134.5, 84, 21, 104), path('seg thin', `M${d + 122} 133H${d + 131}`)),
-    text('', d + 145, 208, formatVolume(device.cartridgeUl), 'middle'),
+    group(`st-${loop.state}`, rect('node', x - half, top, 2 * half, bottom - top)), ...conductors.map(through),
+    text('mono', x, bottom + 15, loop.boxes[i].location, 'middle'),
   ];
 }
 
-/** The grease's way, the bearing, and the place where a signature will stand. */
-function point(loop: LoopView): readonly Mark[] {
-  const [x, y] = [X.point + 22, 132.5];
-  const balls = Array.from({ length: 8 }, (_, k) => circle('ball', x + 17 * Math.cos((k * Math.PI) / 4), y + 17 * Math.sin((k * Math.PI) / 4), 3.4));
+/** Who else hangs on this box: other lanes, and the trunk's way on to boxes that this lane does not pass. */
+function neighbours(box: LoopBox, { boxes, conductors }: Layout, i: number): readonly Mark[] {
+  const [x, top, foot] = [boxes[i], conductors[0].y - 14, conductors.at(-1)!.y + 14];
+  const onTo = box.onTo.length > 2 ? `${box.onTo[0]} and ${box.onTo.length - 1} more` : box.onTo.join(', ');
   return [
-    run(X.dispenser + 159, X.point - 2, y, loop.state, 'grease'),
-    group(`st-${loop.state} grease`, circle('node', x, y, 24), circle('node', x, y, 10), ...balls),
-    text('', X.point + 30, 184, formatDemand(loop.point.demandUlPer1000h), 'middle'),
-    text('dim', X.end - 8, 201, short(loop.point.description ?? ''), 'end'),
-    signaturePlace(X.end - 34, y, 11),
+    ...(box.others > 0 ? [text('dim', x, foot + 30, moreLanes(box.others), 'middle')] : []),
+    ...(box.onTo.length > 0 ? [group('branch', path('seg fine', `M${x} ${top}V${top - 9}`), path('head', `M${x} ${top - 15}l3.5 7h-7z`)), text('mono dim', x, top - 20, `to ${onTo}`, 'middle')] : []),
   ];
 }
 
-const short = (words: string): string => (words.length > 26 ? `${words.slice(0, 25).trimEnd()}…` : words);
+/** Each trunk's name, length and sections, as much as there is room for; the rest stands in the list of stations. */
+function trunkLabel(loop: LoopView, { boxes, half, conductors, trunk }: Layout, box: LoopBox, i: number): readonly Mark[] {
+  const from = i === 0 ? trunk + 8 : boxes[i - 1] + half;
+  const to = boxes[i] - half;
+  const room = to - from;
+  const section = `2${THIN_SPACE}×${THIN_SPACE}${formatSection(box.powerMm2)}`;
+  const pair = [box.cableTag, ...(room > 80 ? [formatMetres(box.lengthM)] : []), ...(room > 132 ? [section] : [])].join(' ');
+  const [power, signal] = loop.wiring === 'four-core' ? [conductors[0], conductors[2]] : [conductors[1], conductors[0]];
+  const cores = loop.wiring === 'two-core' ? 'own core' : 'cores';
+  return [
+    text('cb', (from + to) / 2, power.y - 9, pair, 'middle'),
+    ...(room > 50 ? [text('cb', (from + to) / 2, signal.y - 9, `${room > 105 ? `${cores} ` : ''}${formatSection(box.signalMm2)}`, 'middle')] : []),
+  ];
+}
+
+/** Length over its first conductor, cores and section over the last but one. */
+function ownCableLabel(loop: LoopView, { boxes, half, conductors, trunk, dispenser }: Layout): readonly Mark[] {
+  const middle = ((boxes.length > 0 ? boxes.at(-1)! + half : trunk) + dispenser) / 2;
+  const signal = conductors[Math.min(2, conductors.length - 1)];
+  return [
+    text('cb', middle, conductors[0].y - 9, formatMetres(loop.cable.lengthM), 'middle'),
+    ...(loop.cable.sectionMm2 === null ? [] : [text('cb', middle, signal.y - 9, `${conductors.length}${THIN_SPACE}×${THIN_SPACE}${formatSection(loop.cable.sectionMm2)}`, 'middle')]),
+  ];
+}

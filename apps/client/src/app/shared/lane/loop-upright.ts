@@ -1,31 +1,30 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
+import { formatNumber } from '#calc';
 import { Drawing } from '../drawing/drawing';
 import { Figure } from '../figure/figure';
+import { FindingMark } from '../findings/finding-mark';
 import type { LoopView } from './loop-view';
+import { columnParts } from './upright-profile';
 import { uprightStations } from './upright-stations';
 
-/** The loop diagram on a phone: one station a line. */
+/** The loop diagram where there is little room: one station a line, the voltage profile as a column beside it. */
 @Component({
   selector: 'lw-loop-upright',
-  imports: [Drawing, Figure],
+  imports: [Drawing, Figure, FindingMark],
   changeDetection: ChangeDetectionStrategy.OnPush,
   styleUrl: './loop-upright.css',
-  template: `
-    <ol>
-      @for (station of stations(); track $index) {
-        <li class="st-{{ loop().state }}" [class.grease]="station.grease">
-          <span class="ln {{ loop().state }}" aria-hidden="true"></span>
-          <svg class="lane" width="24" height="24" viewBox="0 0 24 24" aria-hidden="true" [lwDrawing]="station.node"></svg>
-          <div><span class="k">{{ station.kind }}</span><span class="v" [class.mono]="station.mono">{{ station.name }}</span><span class="d">{{ station.detail }}</span></div>
-          @if (station.figure) { <lw-figure class="r" [text]="station.figure" [bad]="station.bad" /> }
-        </li>
-      }
-    </ol>
-    @if (loop().wiring === 'four-core') {
-      <p class="back">{{ loop().status === null ? 'The status signal has no input yet.' : 'Status back to ' }}@if (loop().status; as status) {<span class="mono">{{ status.module }} {{ status.address }}</span>}</p>
-    } @else { <p class="back">Two-core: the output feeds the motor; there is no status signal.</p> }`,
+  templateUrl: './loop-upright.html',
 })
 export class LoopUpright {
   readonly loop = input.required<LoopView>();
+  readonly words = input.required<string>();
   protected readonly stations = computed(() => uprightStations(this.loop()));
+  protected readonly column = computed(() => columnParts(this.loop().profile, this.stations()));
+  /** What stands under the column: the figures that have no station of their own. */
+  protected readonly notes = computed(() => {
+    const profile = this.loop().profile;
+    if (!profile) return null;
+    const volts = (value: number | null): string | null => (value === null ? null : `${formatNumber(value, 1, 'down')} V`);
+    return { worstSet: profile.worstSet, min: volts(profile.minV), idle: volts(profile.idleV), allOn: volts(profile.allOnV), count: profile.allOnCount };
+  });
 }
