@@ -83,7 +83,7 @@ export class PointEdits {
     this.view.refusal.set(result.refusals.length > 0 ? `Nothing was ${what}. ${refusalText(result)}` : null);
     const changes = changesOf(result.edits);
     if (result.refusals.length > 0 || changes.length === 0) return;
-    void this.project.apply(summary ?? `${counted(changes.length, 'row')} of points ${what}`, changes);
+    void this.project.apply(summary ?? null, changes);
   }
 
   /** A dose and cartridge for one point or several; with one whose type cannot give it for none. */
