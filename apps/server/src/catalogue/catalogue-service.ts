@@ -45,7 +45,7 @@ async function insertEntry(tx: Tx, orgId: string, { table, Row }: CatalogueKind,
   const typeVersion = 'typeVersion' in table ? { type_version: await nextVersion(tx, table, String(entry['name'])) } : {};
   const columns = columnsOf(table, Row);
   const values = Object.fromEntries(Object.entries(entry).map(([field, value]) => [columns[field]?.name ?? field, value]));
-  await insertRecords({ tx }, table, [{ ...values, org_id: orgId, ...typeVersion, created_at: new Date().toISOString() }]);
+  await insertRecords({ tx }, table, [{ ...values, org_id: orgId, ...typeVersion, created_at: new Date().toISOString() }], (record) => record);
   return findEntry(tx, table, Row, String(entry['id']));
 }
 

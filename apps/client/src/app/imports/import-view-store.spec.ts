@@ -123,7 +123,7 @@ describe('ImportViewStore', () => {
 
   it('does not send a file that is too large', async () => {
     await store.upload(new File([new Uint8Array(25_000_001)], 'huge.csv'));
-    expect(store.problem()).toMatchObject({ title: 'The file is too large', detail: expect.stringContaining('It has 10.1 MB') as string });
+    expect(store.problem()).toMatchObject({ title: 'The file is too large', detail: expect.stringContaining('It has 25.1 MB') as string });
   });
 
   it('sends the same file with the same id again after the network was lost', async () => {

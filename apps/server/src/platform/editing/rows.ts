@@ -57,14 +57,19 @@ export async function lockRows(scope: Scope, collection: Collection, ids: readon
 
 export async function insertRows(scope: Scope, { table, resource }: Collection, rows: readonly Row[]): Promise<void> {
   const fixed = { org_id: scope.orgId, project_id: scope.projectId };
-  const columns = columnsOf(table, resource.Row);
-  await insertRecords(scope, table, rows.map((row) => ({ ...inColumns(columns, row), ...fixed })));
+  const inColumns = columnNamer(columnsOf(table, resource.Row));
+  await insertRecords(scope, table, rows, (row) => Object.assign(inColumns(row), fixed));
 }
 
-/** Inserts records whose keys are the table's column names; all records have the same keys. */
-export async function insertRecords({ tx, written }: Pick<Scope, 'tx' | 'written'>, table: PgTable, records: readonly Readonly<Record<string, unknown>>[]): Promise<void> {
-  const names = sql.join(Object.keys(records[0] ?? {}).map((name) => sql.identifier(name)), sql`, `);
-  for (const batch of batches(records)) {
+/** Inserts a record for each of `all`; the keys of every record are the same column names of the table. */
+export async function insertRecords<T>(
+  { tx, written }: Pick<Scope, 'tx' | 'written'>, table: PgTable, all: readonly T[], recordOf: (each: T) => Readonly<Record<string, unknown>>,
+): Promise<void> {
+  if (all.length === 0) return;
+  const names = sql.join(Object.keys(recordOf(all[0])).map((name) => sql.identifier(name)), sql`, `);
+  // Records are made batch by batch: all of them at once would be the import's largest heap.
+  for (const part of batches(all)) {
+    const batch = part.map(recordOf);
     await tx.execute(sql`insert into ${table} (${names}) select ${names} from json_populate_recordset(null::${table}, ${JSON.stringify(batch)}::text::json)`);
     written?.(batch.length);
   }
@@ -76,7 +81,9 @@ export async function updateRows(scope: Scope, collection: Collection, rows: rea
   const columns = columnsOf(table, resource.Row);
   const assignments = Object.entries(columns).filter(([field]) => field !== 'id')
     .map(([, column]) => sql`${sql.identifier(column.name)} = r.${sql.identifier(column.name)}`);
-  for (const batch of batches(rows.map((row) => inColumns(columns, row)))) {
+  const inColumns = columnNamer(columns);
+  for (const part of batches(rows)) {
+    const batch = part.map(inColumns);
     await scope.tx.execute(sql`
       update ${table} set ${sql.join(assignments, sql`, `)}
       from json_populate_recordset(null::${table}, ${JSON.stringify(batch)}::text::json) r
@@ -91,8 +98,15 @@ export async function deleteRows(scope: Scope, collection: Collection, ids: read
   }
 }
 
-const inColumns = (columns: Record<string, PgColumn>, row: Row): Record<string, unknown> =>
-  Object.fromEntries(Object.entries(columns).map(([field, column]) => [column.name, row[field] ?? null]));
+/** Turns a row's field names into column names; fields that it lacks are null. */
+function columnNamer(columns: Record<string, PgColumn>): (row: Row) => Record<string, unknown> {
+  const pairs = Object.entries(columns).map(([field, { name }]) => [field, name] as const);
+  return (row) => {
+    const record: Record<string, unknown> = {};
+    for (const [field, name] of pairs) record[name] = row[field] ?? null;
+    return record;
+  };
+}
 
 function batches<T>(all: readonly T[]): T[][] {
   const parts: T[][] = [];

@@ -24,9 +24,9 @@ export async function recordChangeSet(scope: Scope, personId: string, set: SetNa
   const { tx, orgId, projectId } = scope;
   if (items.length === 0) return currentSequence(scope);
   await tx.execute(sql`set constraints change_items_set_fk deferred`);
-  await insertRecords(scope, changeItems, items.map(({ collection, rowId, before, after }) => ({
+  await insertRecords(scope, changeItems, items, ({ collection, rowId, before, after }) => ({
     id: newId(), org_id: orgId, project_id: projectId, change_set_id: set.id, collection, row_id: rowId, before, after,
-  })));
+  }));
   const [taken] = await tx.update(projects).set({ sequence: sql`${projects.sequence} + 1` }).where(eq(projects.id, projectId))
     .returning({ sequence: projects.sequence });
   if (!taken) throw new NotFound('project');
