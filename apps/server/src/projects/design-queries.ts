@@ -1,10 +1,9 @@
 import { projects as projectResource, projectResources } from '#contract';
 import { projects } from '#schema';
-import { eq, type SQL, sql } from 'drizzle-orm';
+import { eq, sql } from 'drizzle-orm';
 import { catalogueJson, catalogueSize } from '../catalogue/catalogue-service.ts';
 import type { Tx } from '../platform/database.ts';
-import { jsonRows } from '../platform/editing/json-rows.ts';
-import { columnsOf } from '../platform/editing/rows.ts';
+import { jsonRows, jsonRowTexts } from '../platform/editing/json-rows.ts';
 import { collectionNamed } from './collections.ts';
 
 /** Number of the project's last change and size of the catalogue: together they tell whether a design is the same. */
@@ -25,7 +24,10 @@ export async function findDesignStamp(tx: Tx, projectId: string): Promise<Design
  */
 export async function findDesign(tx: Tx, projectId: string): Promise<(DesignStamp & { readonly text: string }) | undefined> {
   const names = Object.keys(projectResources) as (keyof typeof projectResources)[];
-  const texts = names.map((name) => sql`${rowTexts(name, projectId)} as ${sql.identifier(name)}`);
+  const texts = names.map((name) => {
+    const { table, resource } = collectionNamed(name);
+    return sql`${jsonRowTexts(table, resource.Row, sql`project_id = ${projectId}`)} as ${sql.identifier(name)}`;
+  });
   const [found] = await tx.execute<DesignStamp & Record<string, string>>(sql`
     select p.sequence, ${catalogueSize()} as entries,
       (${jsonRows(projects, projectResource.Row, sql`id = ${projectId}`)} -> 0)::text as project, ${catalogueJson()}::text as catalogue,
@@ -35,12 +37,4 @@ export async function findDesign(tx: Tx, projectId: string): Promise<(DesignStam
   const collections = names.map((name) => `${JSON.stringify(name)}:[${found[name]}]`).join(',');
   const { sequence, entries, project, catalogue } = found;
   return { sequence, entries, text: `{"sequence":${sequence},"project":${project},"catalogue":${catalogue},${collections}}` };
-}
-
-/** The rows of a collection in the order of creation as JSON, without the brackets around them; faster than json_agg. */
-function rowTexts(name: keyof typeof projectResources, projectId: string): SQL {
-  const { table, resource } = collectionNamed(name);
-  const fields = Object.entries(columnsOf(table, resource.Row)).map(([field, column]) => sql`${sql.identifier(column.name)} as ${sql.identifier(field)}`);
-  return sql`(select coalesce(string_agg(row_to_json(r)::text, ','), '')
-    from (select ${sql.join(fields, sql`, `)} from ${table} where project_id = ${projectId} order by id) r)`;
 }
