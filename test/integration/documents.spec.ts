@@ -1,21 +1,13 @@
-import { drizzle } from 'drizzle-orm/postgres-js';
-import { sql } from 'drizzle-orm';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { brackwaterDesign } from '../../db/seed/brackwater.ts';
-import { insertDesign } from '../../db/seed/insert-design.ts';
-import { seedIds } from '../../db/seed/seed-ids.ts';
+import { seedTerminal } from '#support/import-project.ts';
 import { type TestApp, testApp } from '#support/test-app.ts';
 
-const design = brackwaterDesign({ catalogue: seedIds('catalogue'), row: seedIds('row') });
-const url = `/api/v1/projects/${design.project.id}/documents/io-list`;
 let app: TestApp;
+let url: string;
 
 beforeAll(async () => {
   app = await testApp();
-  await drizzle(app.database.owner).transaction(async (tx) => {
-    await tx.execute(sql`select set_config('lanewright.org_id', ${app.org.id}, true)`);
-    await insertDesign(tx, app.org.id, design);
-  });
+  url = `/api/v1/projects/${(await seedTerminal(app)).project.id}/documents/io-list`;
 });
 afterAll(() => app.close());
 

@@ -18,7 +18,7 @@ let project: ImportProject;
 
 beforeAll(async () => {
   app = await testApp();
-  project = await ImportProject.create(await app.as('engineer'), await seedTerminal(app));
+  project = await ImportProject.create(await app.as('engineer'), (await seedTerminal(app)).project.id);
 });
 afterAll(() => app.close());
 

@@ -1,8 +1,10 @@
 import { readFileSync } from 'node:fs';
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
 import { v7 as newId } from 'uuid';
-import { ImportProject, seedTerminal, tagList } from '#support/import-project.ts';
+import { tagListBytes } from '#support/brackwater-setup.ts';
+import { ImportProject, seedTerminal } from '#support/import-project.ts';
 import { signedIn, type TestApp, testApp } from '#support/test-app.ts';
+import { asOrganisation } from '#support/test-database.ts';
 
 const WORKBOOK = 'brackwater-signals.xlsx';
 /** Source: our own list of what this workbook holds, written with it (see its README). */
@@ -19,7 +21,7 @@ let project: ImportProject;
 
 beforeAll(async () => {
   app = await testApp();
-  terminal = await seedTerminal(app);
+  terminal = (await seedTerminal(app)).project.id;
 });
 afterAll(() => app.close());
 beforeEach(async () => {
@@ -67,13 +69,11 @@ describe('a signal list as a workbook', () => {
   });
 
   it('refuses what is no workbook that may be read, with what to do, and keeps nothing', async () => {
-    const whole = tagList(WORKBOOK);
+    const whole = tagListBytes(WORKBOOK);
     const answer = await project.engineer.post(`${project.url}/imports`).attach('file', whole.subarray(0, 5000), WORKBOOK).expect(422);
     expect((answer.body as { detail: string }).detail).toMatch(/again|save/i);
-    expect(await app.database.owner.begin(async (tx) => {
-      await tx`select set_config('lanewright.org_id', ${app.org.id}, true)`;
-      return tx`select id from imports where project_id = ${project.url.split('/').at(-1) ?? ''}`;
-    })).toEqual([]);
+    const kept = await asOrganisation(app.database.owner, app.org.id, (tx) => tx`select id from imports where project_id = ${project.url.split('/').at(-1) ?? ''}`);
+    expect(kept).toEqual([]);
   });
 });
 

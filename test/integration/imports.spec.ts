@@ -10,7 +10,7 @@ let project: ImportProject;
 
 beforeAll(async () => {
   app = await testApp();
-  terminal = await seedTerminal(app);
+  terminal = (await seedTerminal(app)).project.id;
 });
 afterAll(() => app.close());
 beforeEach(async () => {

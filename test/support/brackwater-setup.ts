@@ -39,7 +39,7 @@ interface Setup {
 }
 
 /** The bytes of a file of `test/fixtures/tag-lists`, by its name. */
-export function tagListBytes(name: string): Uint8Array {
+export function tagListBytes(name: string): Buffer {
   return readFileSync(new URL(name, TAG_LISTS));
 }
 

@@ -1,4 +1,4 @@
-import { readFileSync } from 'node:fs';
+import type { Design } from '#calc';
 import type { DesignDocument, ImportPreview, ImportResult, ImportRowPage } from '#contract';
 import { sql } from 'drizzle-orm';
 import { drizzle } from 'drizzle-orm/postgres-js';
@@ -6,19 +6,17 @@ import { v7 as newId } from 'uuid';
 import { brackwaterDesign } from '../../db/seed/brackwater.ts';
 import { insertDesign } from '../../db/seed/insert-design.ts';
 import { seedIds } from '../../db/seed/seed-ids.ts';
+import { tagListBytes } from './brackwater-setup.ts';
 import type { Agent, TestApp } from './test-app.ts';
 
-/** A tag list of the fixtures. */
-export const tagList = (name: string): Buffer => readFileSync(`test/fixtures/tag-lists/${name}`);
-
-/** Puts the terminal into the organisation, as a project whose hardware others copy; gives its id. */
-export async function seedTerminal(app: TestApp): Promise<string> {
+/** Puts the terminal into the organisation, as a project whose hardware others copy. */
+export async function seedTerminal(app: TestApp): Promise<Design> {
   const terminal = brackwaterDesign({ catalogue: seedIds('catalogue'), row: seedIds('row') });
   await drizzle(app.database.owner).transaction(async (tx) => {
     await tx.execute(sql`select set_config('lanewright.org_id', ${app.org.id}, true)`);
     await insertDesign(tx, app.org.id, terminal);
   });
-  return terminal.project.id;
+  return terminal;
 }
 
 /** A project with the terminal's hardware and no points, and what an engineer does there with tag lists. */
@@ -31,7 +29,7 @@ export class ImportProject {
     return new ImportProject(engineer, `/api/v1/projects/${id}`);
   }
 
-  async upload(name: string, bytes: Buffer = tagList(name)): Promise<ImportPreview> {
+  async upload(name: string, bytes: Buffer = tagListBytes(name)): Promise<ImportPreview> {
     return (await this.engineer.post(`${this.url}/imports`).attach('file', bytes, name).expect(201)).body as ImportPreview;
   }
 

@@ -1,7 +1,8 @@
 import fc from 'fast-check';
 import { Archive } from '../../apps/server/src/imports/reading/workbook/archive.ts';
 import { zipOf } from '../../apps/server/src/imports/reading/workbook/testing/zip-builder.ts';
-import { tagList } from './import-project.ts';
+import { tagListBytes } from './brackwater-setup.ts';
+import { mutated, type Mutation } from './mutations.ts';
 
 const CSVS = ['brackwater-points.csv', 'brackwater-points-semicolon-1252.csv', 'brackwater-faults.csv', 'designations.csv'];
 const WORKBOOK = 'brackwater-signals.xlsx';
@@ -12,26 +13,24 @@ export interface MutatedFile {
   readonly bytes: Buffer;
 }
 
-/** One thing done to a file; the place is a share of its length, so that one list of changes fits every file. */
-const change = fc.record({
+const change: fc.Arbitrary<Mutation> = fc.record({
   kind: fc.constantFrom('flip', 'overwrite', 'cut', 'remove', 'insert', 'repeat', 'splice'),
   millionths: fc.noBias(fc.nat(999_999)),
   length: fc.oneof(fc.integer({ min: 1, max: 40 }), fc.integer({ min: 100, max: 5000 })),
-  text: fc.constantFrom('"', '""', ',', ';', '\n', '\r\n', '\0', '\ufeff', '=1+1', "'", '%QX4.0', '1e309', '-0', 'n/a', '\u00a0', '\ud83d\ude00', '<v>', '</row>', '&lol;', '<!DOCTYPE x>', 'GC1-L01'),
-});
-type Change = typeof change extends fc.Arbitrary<infer T> ? T : never;
+  filler: fc.constantFrom('"', '""', ',', ';', '\n', '\r\n', '\0', '\ufeff', '=1+1', "'", '%QX4.0', '1e309', '-0', 'n/a', '\u00a0', '\ud83d\ude00', '<v>', '</row>', '&lol;', '<!DOCTYPE x>', 'GC1-L01'),
+}).map((each) => ({ ...each, bit: each.length % 8 }));
 
 const mutation = fc.record({ csv: fc.boolean(), which: fc.nat(CSVS.length - 1), inside: fc.boolean(), part: fc.noBias(fc.nat(999)), changes: fc.array(change, { minLength: 1, maxLength: 4 }) });
 
 /** As many broken files as wanted, always the same for the same seed: lists and workbooks, half of the latter broken inside their parts. */
 export async function* mutatedFiles(count: number, seed: number): AsyncGenerator<MutatedFile> {
-  const parts = await partsOf(tagList(WORKBOOK));
+  const parts = await partsOf(tagListBytes(WORKBOOK));
   for (const { csv, which, inside, part, changes } of fc.sample(mutation, { numRuns: count, seed })) {
-    if (csv) yield { name: CSVS[which], bytes: changed(tagList(CSVS[which]), changes) };
-    else if (!inside) yield { name: WORKBOOK, bytes: changed(tagList(WORKBOOK), changes) };
+    if (csv) yield { name: CSVS[which], bytes: changes.reduce(mutated, tagListBytes(CSVS[which])) };
+    else if (!inside) yield { name: WORKBOOK, bytes: changes.reduce(mutated, tagListBytes(WORKBOOK)) };
     else {
       const at = part % parts.length;
-      yield { name: `${parts[at][0]} of ${WORKBOOK}`, bytes: zipOf(parts.map(([name, text], i) => [name, i === at ? changed(Buffer.from(text), changes).toString() : text] as const)) };
+      yield { name: `${parts[at][0]} of ${WORKBOOK}`, bytes: zipOf(parts.map(([name, text], i) => [name, i === at ? changes.reduce(mutated, Buffer.from(text)).toString() : text] as const)) };
     }
   }
 }
@@ -45,21 +44,4 @@ async function partsOf(bytes: Buffer): Promise<[string, string][]> {
     parts.push([name, text]);
   }
   return parts;
-}
-
-function changed(bytes: Buffer, changes: readonly Change[]): Buffer {
-  return changes.reduce((before, { kind, millionths, length, text }) => {
-    const place = Math.floor((millionths * before.length) / 1_000_000);
-    const [head, rest] = [before.subarray(0, place), before.subarray(place)];
-    const bytesOf: Readonly<Record<Change['kind'], () => Buffer[]>> = {
-      flip: () => [head, Buffer.of((rest[0] ?? 0) ^ (1 << (length % 8))), rest.subarray(1)],
-      overwrite: () => [head, Buffer.alloc(Math.min(length, rest.length), text), rest.subarray(length)],
-      cut: () => [head],
-      remove: () => [head, rest.subarray(length)],
-      insert: () => [head, Buffer.alloc(length, text), rest],
-      repeat: () => [head, rest.subarray(0, length), rest],
-      splice: () => [head, Buffer.from(text), rest],
-    };
-    return Buffer.concat(bytesOf[kind]());
-  }, bytes);
 }

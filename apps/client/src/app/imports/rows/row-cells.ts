@@ -24,6 +24,9 @@ const OF_SIGNALS: Readonly<Record<string, readonly string[]>> = {
   signalType: [], module: ['outputModule', 'statusModule'], channel: ['outputChannel', 'statusChannel'], address: ['outputAddress', 'statusAddress'],
 };
 
+/** The column of the file that holds the tags. */
+export const tagColumnOf = ({ columns }: ImportPreview): string | null => columns.find(({ field }) => field === 'tag')?.column ?? null;
+
 /** The fields of a preview that stand behind tag and description, in the order of the menus. */
 export function rowFieldsOf({ columns, fields }: ImportPreview): readonly RowField[] {
   const given = new Map<string, string>();

@@ -1,5 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
+import { mutated, type Mutation } from '#support/mutations.ts';
 import { runs } from '#support/property-runs.ts';
 import { tagListBytes } from '#support/brackwater-setup.ts';
 import { LIMITS } from '../grid.ts';
@@ -17,28 +18,14 @@ const PIECES = {
   styles: stylesOf(['yyyy-mm-dd hh:mm', '0.0%']),
 };
 const FILES = workbookFiles(PIECES);
-const WHOLE = [zipOf(FILES), Buffer.from(tagListBytes('brackwater-signals.xlsx'))];
+const WHOLE = [zipOf(FILES), tagListBytes('brackwater-signals.xlsx')];
 
-/** One thing done to the bytes of a file: a bit turned, bytes written over, taken out, put in, repeated, or the rest cut off. */
-const change = fc.record({
+const change: fc.Arbitrary<Mutation> = fc.record({
   kind: fc.constantFrom('flip', 'flip', 'flip', 'flip', 'overwrite', 'overwrite', 'cut', 'remove', 'insert', 'repeat'),
   millionths: fc.noBias(fc.nat(999_999)),
   length: fc.integer({ min: 1, max: 64 }),
   bit: fc.integer({ min: 0, max: 7 }),
-});
-type Change = typeof change extends fc.Arbitrary<infer T> ? T : never;
-
-function changed(bytes: Buffer, { kind, millionths, length, bit }: Change): Buffer {
-  const place = Math.floor((millionths * bytes.length) / 1_000_000);
-  const [head, rest] = [bytes.subarray(0, place), bytes.subarray(place)];
-  if (kind === 'flip') return Buffer.concat([head, Buffer.of((rest[0] ?? 0) ^ (1 << bit)), rest.subarray(1)]);
-  if (kind === 'overwrite')
-    return Buffer.concat([head, Buffer.alloc(Math.min(length, rest.length), bit * 37), rest.subarray(length)]);
-  if (kind === 'cut') return head;
-  if (kind === 'remove') return Buffer.concat([head, rest.subarray(length)]);
-  if (kind === 'insert') return Buffer.concat([head, Buffer.alloc(length, bit * 37), rest]);
-  return Buffer.concat([head, rest.subarray(0, length), rest]);
-}
+}).map((each) => ({ ...each, filler: each.bit * 37 }));
 
 /** Reads, and holds that what comes is a reading within its limits or a refusal, and nothing else. */
 async function outcome(bytes: Buffer): Promise<'read' | 'refused'> {
@@ -64,7 +51,7 @@ describe('a workbook with something done to it', () => {
     const changes = fc.array(change, { minLength: 1, maxLength: 3 });
     await fc.assert(
       fc.asyncProperty(fc.constantFrom(...WHOLE), changes, async (whole, each) => {
-        counts[await outcome(each.reduce(changed, whole))] += 1;
+        counts[await outcome(each.reduce(mutated, whole))] += 1;
       }),
       { numRuns: runs(200), seed: 20260301 },
     );
@@ -78,7 +65,7 @@ describe('a workbook with something done to it', () => {
       fc.asyncProperty(part, fc.array(change, { minLength: 1, maxLength: 3 }), async (index, each) => {
         const files = FILES.map(([name, file], i) => {
           const content = Buffer.from(typeof file === 'string' ? file : file.content);
-          return [name, { content: i === index ? each.reduce(changed, content) : content }] as const;
+          return [name, { content: i === index ? each.reduce(mutated, content) : content }] as const;
         });
         counts[await outcome(zipOf(files))] += 1;
       }),

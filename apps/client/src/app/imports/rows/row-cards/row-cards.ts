@@ -3,7 +3,7 @@ import { ChangeDetectionStrategy, Component, computed, effect, input, output, vi
 import type { ImportPreview, ImportRow } from '#contract';
 import { FindingMark } from '../../../shared/findings/finding-mark';
 import { ACTION_WORDS, ActionMark } from '../action-mark/action-mark';
-import { cellText, remarkOf, rowNumbers } from '../row-cells';
+import { cellText, remarkOf, rowNumbers, tagColumnOf } from '../row-cells';
 import type { RowSource } from '../row-source';
 
 const CARD_PX = 92;
@@ -43,7 +43,7 @@ export class RowCards {
   protected readonly cardPx = CARD_PX;
   protected readonly actions = ACTION_WORDS;
   protected readonly text = cellText;
-  private readonly tagColumn = computed(() => this.preview().columns.find((c) => c.field === 'tag')?.column ?? null);
+  private readonly tagColumn = computed(() => tagColumnOf(this.preview()));
   private readonly viewport = viewChild(CdkVirtualScrollViewport);
 
   constructor() {

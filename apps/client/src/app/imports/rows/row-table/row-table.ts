@@ -3,7 +3,7 @@ import { ChangeDetectionStrategy, Component, computed, effect, input, output, si
 import type { ImportPreview, ImportRow } from '#contract';
 import { FindingMark } from '../../../shared/findings/finding-mark';
 import { ACTION_WORDS, ActionMark } from '../action-mark/action-mark';
-import { cellText, hasDetails, isFaulty, oldText, remarkOf, rowFieldsOf, rowNumbers, unsaid } from '../row-cells';
+import { cellText, hasDetails, isFaulty, oldText, remarkOf, rowFieldsOf, rowNumbers, tagColumnOf, unsaid } from '../row-cells';
 import type { RowSource } from '../row-source';
 
 const ROW_PX = 30;
@@ -37,7 +37,7 @@ export class RowTable {
   protected readonly more = unsaid;
   protected readonly numbers = rowNumbers;
   protected readonly fields = computed(() => rowFieldsOf(this.preview()));
-  protected readonly tagColumn = computed(() => this.preview().columns.find((c) => c.field === 'tag')?.column ?? null);
+  protected readonly tagColumn = computed(() => tagColumnOf(this.preview()));
   protected readonly withSheets = computed(() => this.preview().sheets.filter((sheet) => sheet.taken).length > 1);
   /** Room for two row numbers. */
   protected readonly rowWidth = computed(() => (this.preview().counts.rows > 9_000 ? 112 : this.preview().counts.rows > 900 ? 98 : 82));
